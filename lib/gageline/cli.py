@@ -1,0 +1,193 @@
+"""The command line: each verb is one call into the package; heavy imports happen inside the verbs."""
+
+import sys
+from pathlib import Path
+from typing import Annotated
+
+import typer
+
+from . import __version__
+from .errors import GagelineError
+
+app = typer.Typer(add_completion=False, no_args_is_help=True, pretty_exceptions_enable=False, rich_markup_mode=None,
+                  help="Calculation reports for steel tension members and their end connections.")
+
+Notebook = Annotated[Path, typer.Argument(help="the calculation's notebook")]
+Set = Annotated[list[str], typer.Option("--set", help="override an input, for example --set 'rows=5' (may be repeated)")]
+
+
+def _version(value: bool):
+    if value:
+        typer.echo(f"gageline {__version__}")
+        raise typer.Exit()
+
+
+@app.callback()
+def _main(debug: Annotated[bool, typer.Option("--debug", help="show a traceback on errors")] = False,
+          version: Annotated[bool, typer.Option("--version", callback=_version, is_eager=True, help="print the version")] = False):
+    pass
+
+
+@app.command()
+def new(mark: Annotated[str, typer.Argument(help="piece mark, which names the notebook")],
+        project: Annotated[Path, typer.Option("--project", "-p", help="the project's folder, made where it is missing")],
+        family: Annotated[str, typer.Option("--family", "-f", help="family of connection")] = "bolted"):
+    """Start a calculation from a template in a project."""
+    from .starting import start
+
+    typer.echo(f"{start(mark, project, family)}: edit its inputs cell, run it in JupyterLab, then: gageline report <notebook>")
+
+
+@app.command()
+def report(notebook: Notebook, set_: Set = [], out: Annotated[Path | None, typer.Option("--out", "-o", help="the PDF to write")] = None,  # noqa: B006
+           save: Annotated[bool, typer.Option("--save", help="write the notebook back with its outputs")] = False):
+    """Run one calculation and make its PDF."""
+    from . import running
+
+    say, done = _progress()
+    try:
+        path, calc = running.report(notebook, overrides(set_), out, save, say)
+    finally:
+        done()
+    _told(path, calc)
+
+
+@app.command()
+def quick(notebook: Notebook, set_: Set = []):  # noqa: B006
+    """Compute one calculation from its inputs alone and print its summary; no notebook is run, no PDF made."""
+    from . import cells, running
+    from .calc import Calc
+    from .project import find
+
+    book = running.read_notebook(notebook)
+    given = cells.inputs_of_notebook(book)
+    given = cells.merged(given, {name: cells.Given(value, "") for name, value in overrides(set_).items()})
+    _print_summary(Calc(running.family_of(book, notebook), given, find(notebook.resolve().parent)).connection)
+
+
+@app.command()
+def demo(folder: Annotated[Path, typer.Argument(help="where to build the demonstration project")] = Path()):
+    """Build the demonstration project: its notebooks and their PDFs."""
+    from . import running
+    from .starting import demonstration
+
+    for notebook in demonstration(folder):
+        say, done = _progress()
+        try:
+            path, calc = running.report(notebook, say=say)
+        finally:
+            done()
+        _told(path, calc)
+
+
+@app.command()
+def inputs(family: Annotated[str, typer.Argument(help="family of connection")] = "bolted"):
+    """List every input of a family with its meaning."""
+    from rich.table import Table
+
+    from . import families
+
+    table = Table("input", "meaning", "default", box=None, pad_edge=False)
+    group = None
+    for name, field in families.family(family).Model.model_fields.items():
+        if field.json_schema_extra["group"] != group:
+            group = field.json_schema_extra["group"]
+            table.add_row(f"[bold]{group}[/bold]")
+        default = "compulsory" if field.is_required() else "" if field.default in (None, (), "") else str(field.default)
+        table.add_row(name, field.description, default)
+    _console().print(table)
+
+
+@app.command()
+def shapes(like: Annotated[str, typer.Argument(help="a series (WT) or the beginning of a designation (WT8)")] = ""):
+    """List the shapes of the tables."""
+    from .facts import shapes as tables
+
+    wanted = like.replace(" ", "").replace("×", "x").upper()
+    found = [name for name in tables.names() if name.upper().startswith(wanted)]
+    if not found:
+        tables.shape(like)
+    typer.echo("\n".join(found))
+
+
+def overrides(pairs):
+    """Return name -> value of ``name=value`` texts; numbers and True/False are read as such, everything else is text."""
+    import ast
+
+    from .errors import InputError
+
+    out = {}
+    for pair in pairs:
+        name, equals, text = pair.partition("=")
+        if not equals or not name.strip():
+            raise InputError(f"--set {pair!r}: write name=value, for example --set 'rows=5'")
+        try:
+            out[name.strip()] = ast.literal_eval(text.strip())
+        except (ValueError, SyntaxError):
+            out[name.strip()] = text.strip()
+    return out
+
+
+def _progress():
+    """Return (say, done) of a one-line progress display on a terminal's stderr; silent elsewhere."""
+    if not sys.stderr.isatty():
+        return (lambda text: None), (lambda: None)
+    from rich.console import Console
+
+    status = Console(stderr=True).status("starting")
+    status.start()
+    return status.update, status.stop
+
+
+def _told(path, calc):
+    from .presenting import ratio
+
+    governs = calc.connection.governing
+    verdict = "OK" if calc.connection.ok else "N.G."
+    typer.echo(f"{calc.connection.inputs.mark}: {verdict}, {governs.title} governs, D/C = {ratio(governs)}; {path}")
+
+
+def _print_summary(connection):
+    from rich.table import Table
+
+    from . import check, presenting
+
+    table = Table("check", "clause", "required", "available", "D/C", "", box=None, pad_edge=False)
+    for each in check.worst_first(connection.checks):
+        table.add_row(each.title, each.clause, presenting.required(each), presenting.available(each), presenting.ratio(each),
+                      "OK" if each.ok else "see note" if each.kind == "advice" else "N.G.", style="bold" if each is connection.governing else None)
+    for each in connection.checks:
+        if not each.applies:
+            table.add_row(each.title, each.clause, "", "", "–", each.reason, style="dim")
+    _console().print(table)
+
+
+def _console():
+    from rich.console import Console
+
+    return Console(width=None if sys.stdout.isatty() else 140)
+
+
+def main():
+    """Run the command line; errors of ours are one sentence on stderr and exit code 1."""
+    debug = "--debug" in sys.argv
+    try:
+        app(standalone_mode=False)
+    except GagelineError as error:
+        if debug:
+            raise
+        sys.stderr.write(f"gageline: {error}\n")
+        sys.exit(1)
+    except typer.Exit as stop:
+        sys.exit(stop.exit_code)
+    except (typer.Abort, KeyboardInterrupt):
+        sys.stderr.write("gageline: stopped\n")
+        sys.exit(130)
+    except Exception as error:
+        if debug:
+            raise
+        if hasattr(error, "format_message"):
+            sys.stderr.write(f"gageline: {error.format_message()}\n")
+            sys.exit(2)
+        sys.stderr.write(f"gageline: unexpected {type(error).__name__}: {error} (run again with --debug for a traceback)\n")
+        sys.exit(3)

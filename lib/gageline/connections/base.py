@@ -1,0 +1,145 @@
+"""What every family of connection shares: who it is for, its loads, its list of checks and its results as data."""
+
+from functools import cached_property
+from typing import Literal
+
+from .. import check, loads
+from ..editions import Basis
+from ..errors import InputError
+from .fields import Force, Inputs, Number, Texts, note
+
+_WHO, _LOADS, _SAID = "Identification", "Loads", "Assumptions"
+
+
+class CalcInputs(Inputs):
+    """Inputs of every calculation: identification, service loads or a given demand, assumptions, open items."""
+
+    mark: str = note("piece mark of the calculation", group=_WHO, min_length=1)
+    title: str = note("what the member is", "", group=_WHO)
+    purpose: str = note("purpose and scope in a sentence or two", "", group=_WHO)
+
+    P_D: Force | None = note("dead load, service, tension positive", None, group=_LOADS)
+    P_L: Force | None = note("live load", None, group=_LOADS)
+    P_Lr: Force | None = note("roof live load", None, group=_LOADS)
+    P_S: Force | None = note("snow load (strength level in ASCE 7-22)", None, group=_LOADS)
+    P_R: Force | None = note("rain load", None, group=_LOADS)
+    P_W: Force | None = note("wind load in one sense", None, group=_LOADS)
+    P_W_opposite: Force | None = note("wind load in the other sense, normally negative", None, group=_LOADS)
+    P_E: Force | None = note("horizontal seismic effect Q_E, both senses taken", None, group=_LOADS)
+    S_DS: Number = note("design spectral response, for the vertical seismic effect", 0.0, group=_LOADS, ge=0, le=5)
+    rho: Number = note("redundancy factor", 1.0, group=_LOADS, ge=1, le=1.3)
+    Omega_0: Number | None = note("overstrength factor, where the load with overstrength is required", None, group=_LOADS, ge=1, le=4)
+    companion_L: Number = note("factor of L as a companion load (0.5 where ASCE 7 allows it)", 1.0, group=_LOADS)
+    tension: Force | None = note("required tension, instead of service loads", None, group=_LOADS, gt=0, le=50_000)
+    compression: Force | None = note("required compression, with a given required tension", None, group=_LOADS, ge=0, le=50_000)
+    demand_level: Literal["LRFD", "ASD"] | None = note("level of the given demand: LRFD or ASD", None, group=_LOADS)
+
+    assumptions: Texts = note("assumptions of the engineer, each a sentence", (), group=_SAID)
+    open_items: Texts = note("what has to be confirmed, each a sentence", (), group=_SAID)
+
+    def required(self, basis):
+        """Return the demand: all combinations of the service loads, or the given demand with its level.
+
+        Raises
+        ------
+        InputError
+            Both or neither are given, the level is missing, or it is not that of the method.
+        """
+        service = {nature: getattr(self, name) for nature, name in SERVICE.items() if getattr(self, name) is not None}
+        given = [name for name in ("tension", "compression", "demand_level") if getattr(self, name) is not None]
+        if service and given:
+            raise InputError(f"{given[0]} is given together with service loads ({', '.join(SERVICE[n] for n in service)}); give one or the other")
+        if not service:
+            if self.tension is None:
+                raise InputError("no load: give service loads (P_D, P_L, …), or tension with demand_level")
+            if self.demand_level is None:
+                raise InputError("tension is given without demand_level; state whether it is LRFD (factored) or ASD (service combinations)")
+            demand = loads.GivenDemand(self.tension, self.compression or 0.0, self.demand_level)
+        else:
+            if too_big := [SERVICE[nature] for nature, value in service.items() if abs(value) > 50_000]:
+                raise InputError(f"{too_big[0]} is more than 50 000 kip; check the number and its unit")
+            demand = loads.demands(service, basis.method, basis.loads, **self.load_options())
+            if demand.required_tension <= 0:
+                raise InputError("no combination of the loads gives tension; this calculation is for tension members")
+        loads.require_level(demand, basis.method)
+        return demand
+
+    def load_options(self):
+        """Return the options of the load combinations."""
+        return {"companion_L": self.companion_L, "S_DS": self.S_DS, "rho": self.rho, "Omega_0": self.Omega_0}
+
+    def service(self):
+        """Return the service loads given, by nature. [kip]"""
+        return {nature: getattr(self, name) for nature, name in SERVICE.items() if getattr(self, name) is not None}
+
+
+SERVICE = {"D": "P_D", "L": "P_L", "Lr": "P_Lr", "S": "P_S", "R": "P_R", "W": "P_W", "W_opposite": "P_W_opposite", "E": "P_E"}
+"""Nature of a load -> the input that holds it."""
+
+
+class Connection:
+    """A designed connection: validated inputs, and every check on the load path computed once.
+
+    A family gives ``Model`` (its inputs), ``family`` and ``title`` (its name in words), and ``_checks()``.
+    """
+
+    family = ""
+    title = ""
+    Model = CalcInputs
+
+    def __init__(self, inputs, basis=None):
+        self.inputs = inputs
+        self.basis = basis or Basis()
+        self.demand = inputs.required(self.basis)
+
+    @classmethod
+    def of(cls, *, edition="360-22", method="LRFD", loads="7-22", **inputs):
+        """Build a connection from keyword inputs, as in a script; quantities are texts with units.
+
+        Raises
+        ------
+        GagelineError
+            Whatever is wrong with the inputs, as one sentence.
+        """
+        return cls(cls.Model.of(**inputs), Basis(edition, method, loads))
+
+    @cached_property
+    def checks(self):
+        """Every limit state on the load path in order, those that do not apply with their reason."""
+        return tuple(self._checks())
+
+    @property
+    def governing(self):
+        """The strength check with the largest ratio."""
+        return check.governing_check(self.checks)
+
+    @property
+    def ok(self):
+        """Whether no check fails."""
+        return not any(each.fails for each in self.checks)
+
+    @property
+    def capacity(self):
+        """The largest tension that every strength check in tension permits, at the method's level. [kip]"""
+        return min(each.available for each in self.checks if each.kind == "strength" and each.applies and each.tension)
+
+    def to_dict(self):
+        """Return identification, basis, demand, checks and verdict as plain data."""
+        demand = {"tension": self.demand.required_tension, "compression": self.demand.required_compression}
+        return {"family": self.family, "mark": self.inputs.mark, "edition": self.basis.edition, "method": self.basis.method,
+                "loads": self.basis.loads, "demand": demand, "checks": [each.to_dict() for each in self.checks],
+                "governing": self.governing.id, "ratio": self.governing.ratio, "ok": self.ok, "capacity": self.capacity}
+
+    def assumptions(self):
+        """Return (text, basis) of what the calculation takes for granted, the engineer's own first."""
+        return [(text, "engineer") for text in self.inputs.assumptions]
+
+    def open_items(self):
+        """Return what has to be confirmed or decided before the calculation may be relied on."""
+        failed = [f"{each.title}: D/C above 1.00." for each in self.checks if each.fails]
+        advice = [f"{each.title}: recommendation not met." for each in self.checks if each.kind == "advice" and each.ok is False]
+        return [*self.inputs.open_items, *failed, *advice]
+
+    def by_others(self):
+        """Return what the scope leaves to others."""
+        return ()

@@ -1,0 +1,412 @@
+"""A bolted end of a tension member and its connection plates: inputs, the joint they describe, the checks that apply."""
+
+import math
+from typing import Literal
+
+import numpy as np
+
+from .. import units
+from ..check import not_applicable, strength_check
+from ..editions import CLAUSES
+from ..errors import InputError, ScopeError
+from ..facts import bolts as facts
+from ..facts import grades
+from ..geometry import End, Hole, centred_edge, closest_pair, grid, mirrored, outside, tightest_pair
+from . import bolt_group, details, gusset, net_section, tear_out
+from .base import CalcInputs, Connection
+from .element import element
+from .fields import Angle, Length, Lengths, Number, Points, note
+from .joint import Bolts, Gusset, Joint, Ply
+
+HoleKind = Literal["STD", "OVS", "SSL across", "SSL along", "LSL across", "LSL along"]
+
+_MEMBER, _PLATE, _PATTERN, _BOLTS, _GUSSET = "Member", "Connection plate", "Bolt pattern", "Bolts", "Gusset in compression"
+
+
+class BoltedInputs(CalcInputs):
+    """Inputs of a bolted tension connection."""
+
+    member: str = note("shape, or PL thickness x width", group=_MEMBER, min_length=1)
+    member_grade: str = note("steel of the member", group=_MEMBER, min_length=1)
+    connected_by: str | None = note("connected element: both flanges, web, flange, stem, long leg, short leg", None, group=_MEMBER)
+    member_length: Length | None = note("length for the advice on slenderness", None, group=_MEMBER, gt=0, le=24_000)
+    gap: Length | None = note("clear distance between the two angles (default: the plate's thickness)", None, group=_MEMBER, ge=0, le=12)
+    U_by_hand: Number | None = note("shear lag factor set by the engineer", None, group=_MEMBER, gt=0, le=1)
+    U_basis: str = note("written basis of U_by_hand", "", group=_MEMBER)
+
+    plates: Literal[1, 2] = note("connection plates at each bolt group: 1 (lap) or 2 (both sides)", 1, group=_PLATE)
+    plate_thickness: Length = note("thickness of one plate", group=_PLATE, gt=0, le=8)
+    plate_width: Length = note("width of the plate across the load", group=_PLATE, gt=0, le=200)
+    plate_grade: str = note("steel of the plate", group=_PLATE, min_length=1)
+    plate_end: Length = note("first row to the free edge of the plate, on the axis of the pattern", group=_PLATE, gt=0, le=60)
+    plate_edge_angle: Angle = note("angle between the load and the free edge of the plate", math.pi / 2, group=_PLATE, gt=0.5, lt=2.65)
+    plate_offset: Length = note("axis of the pattern off the centre line of the plate", 0.0, group=_PLATE, ge=-100, le=100)
+    filler_thickness: Length = note("fillers at one shear plane, total thickness", 0.0, group=_PLATE, ge=0, le=6)
+    fillers: int = note("number of fillers at one shear plane", 0, group=_PLATE, ge=0, le=4)
+
+    lines: int | None = note("gage lines", None, group=_PATTERN, ge=1, le=10)
+    rows: int | None = note("bolts in each line", None, group=_PATTERN, ge=1, le=40)
+    pitch: Length | None = note("spacing along the line", None, group=_PATTERN, le=24)
+    gage: Lengths = note("spacing of the lines: one for all, or one for each space", (), group=_PATTERN)
+    gage_from_back: Length | None = note("back of the leg, or outer face of the tee's flange, to the first line", None, group=_PATTERN, gt=0, le=60)
+    stagger: Length = note("shift of every second line along the load", 0.0, group=_PATTERN, ge=-24, le=24)
+    holes: Points = note("hole centres instead of lines and rows: x from the first row, y from the back or the lower edge", (), group=_PATTERN)
+    member_end: Length = note("last row to the end of the member", group=_PATTERN, gt=0, le=60)
+    other_leg_holes: Points = note("open holes in the outstanding leg: x from the first row, y from the back", (), group=_PATTERN)
+
+    bolt: str = note("bolt size", group=_BOLTS, min_length=1)
+    bolt_grade: str = note("bolt group or product", group=_BOLTS, min_length=1)
+    threads: Literal["N", "X"] = note("threads in (N) or out of (X) the shear plane", "N", group=_BOLTS)
+    installation: Literal["snug", "pretensioned", "slip-critical"] = note("snug, pretensioned or slip-critical", "snug", group=_BOLTS)
+    slip_class: Literal["A", "B"] | None = note("faying surface of a slip-critical joint", None, group=_BOLTS)
+    member_holes: HoleKind = note("holes of the member", "STD", group=_BOLTS)
+    plate_holes: HoleKind = note("holes of the plates", "STD", group=_BOLTS)
+    deformation_considered: bool = note("deformation at bolt holes at service load is a consideration", True, group=_BOLTS)
+    bare_weathering: bool = note("bare weathering steel outdoors", False, group=_BOLTS)
+
+    gusset_support: str | None = note(f"one of: {', '.join(gusset.K_CHOICES)}; or by hand", None, group=_GUSSET)
+    gusset_length: Length | None = note("last row to the support, along the load", None, group=_GUSSET, ge=0, le=240)
+    gusset_K: Number | None = note("effective length factor, with gusset_support = by hand", None, group=_GUSSET, gt=0, le=2.5)
+    gusset_K_basis: str = note("written basis of gusset_K", "", group=_GUSSET)
+
+
+class BoltedConnection(Connection):
+    """A bolted tension connection, from the member's gross section to its connection plates.
+
+    The checks, in order: member yielding, net rupture, block shear; bolts in shear, with the member's holes, with the plate's
+    holes, slip; plate yielding and rupture on the physical and on the Whitmore width, block shear; compression where the load
+    reverses; spacing, edges, wrench clearance, slenderness.
+    """
+
+    family = "bolted"
+    title = "Bolted tension connection"
+    Model = BoltedInputs
+
+    def __init__(self, inputs, basis=None):
+        super().__init__(inputs, basis)
+        self.size = facts.bolt_size(inputs.bolt)
+        self.bolt_group = facts.bolt_group(inputs.bolt_grade, self.basis.edition)
+        self.element = element(inputs.member, inputs.connected_by, inputs.plate_thickness if inputs.gap is None else inputs.gap)
+        self.member_material = self._material(inputs.member_grade, inputs.member)
+        self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
+        self._refuse_installation()
+        self.joint = self._joint()
+        self._refuse_layout()
+
+    # What the inputs may not be
+
+    def _material(self, grade, designation):
+        if self.element.series != "PL":
+            return grades.material(grade, form="shape", series=self.element.series, edition=self.basis.edition)
+        form = "bar" if designation.strip().lower().startswith("bar") else "plate"
+        return grades.material(grade, form=form, thickness=self.element.t, edition=self.basis.edition)
+
+    def _refuse_installation(self):
+        given, group = self.inputs, self.bolt_group
+        facts.size_notes(self.size, group)
+        if given.installation not in group.installation:
+            raise ScopeError(f"installation = {given.installation!r}: {group.product or group.name} may be {', '.join(group.installation)} only (J3.2)")
+        if (given.installation == "slip-critical") != (given.slip_class is not None):
+            raise InputError("slip_class is needed for a slip-critical joint: A or B" if given.slip_class is None else
+                             "slip_class is given but the joint is not slip-critical; remove it, or set installation = \"slip-critical\"")
+        clause = CLAUSES["holes"][self.basis.edition]
+        for name in ("member_holes", "plate_holes"):
+            kind = getattr(given, name)
+            if given.installation == "slip-critical":
+                continue
+            if kind == "OVS":
+                raise ScopeError(f"{name} = 'OVS': oversized holes are permitted in slip-critical joints only ({clause})")
+            if kind.endswith("along"):
+                raise ScopeError(f"{name} = {kind!r}: in a bearing joint a slot must lie across the load ({clause}); turn it or make the joint slip-critical")
+        long = [given.member_holes.startswith("LSL"), given.plate_holes.startswith("LSL")]
+        if sum(long) == 2 or long[1] and given.plates == 2 or long[0] and self.element.plies == 2:
+            raise ScopeError(f"long slots are permitted in one ply at a faying surface only ({clause})")
+        if given.gap is not None and self.element.plies != 2:
+            raise InputError(f"gap is for double angles; {self.element.member} is none")
+        if self.element.plies == 2 and given.plates == 2:
+            raise InputError("plates = 2: a double angle is bolted to one plate between its angles")
+        if given.gap is not None and given.gap < given.plate_thickness - 1e-9:
+            raise InputError(f"gap = {units.fraction(given.gap)} in is less than the plate's thickness of {units.fraction(given.plate_thickness)} in")
+        if given.U_by_hand is not None and len(given.U_basis.strip()) < 10:
+            raise InputError("U_by_hand needs a written basis in U_basis")
+        if (given.fillers == 0) != (given.filler_thickness == 0):
+            raise InputError("fillers and filler_thickness go together: give both or neither")
+
+    def _refuse_layout(self):
+        joint, d = self.joint, self.size.d
+        named = {"member": f"{self.element.member} {self.element.name}", "plate": "connection plate"}
+        for ply in (joint.member, joint.plate):
+            strip = [hole for hole in ply.holes if hole.y >= 0] if ply.name == "member" else list(ply.holes)
+            if out := outside(strip, ply.width, ply.end):
+                hole = strip[out[0]]
+                x = hole.x if ply.name == "member" else -hole.x
+                raise InputError(f"hole at x = {units.fraction(x)} in, y = {units.fraction(hole.y)} in is cut by an edge of the {named[ply.name]}, "
+                                 f"{units.fraction(ply.width)} in wide; move it or change the part")
+        pair = closest_pair(joint.pattern)
+        if pair and pair.spacing < 8 / 3 * d - 1e-9:
+            raise ScopeError(f"holes {units.printed(pair.spacing)} in apart: the minimum spacing is 2-2/3 d = {units.printed(8 / 3 * d)} in "
+                             f"({CLAUSES['minimum spacing'][self.basis.edition]})")
+        for ply in (joint.member, joint.plate):
+            tight = tightest_pair(ply.bolted)
+            if tight and tight.clear < d - 1e-9:
+                what = "overlap" if tight.clear <= 0 else f"are {units.printed(tight.clear)} in clear of each other"
+                raise ScopeError(f"holes of the {named[ply.name]} {what}: the clear distance may not be less than d = {units.fraction(d)} in "
+                                 f"({CLAUSES['minimum spacing'][self.basis.edition]})")
+        room = details.wrench_room(joint)
+        if room is not None:
+            try:
+                needed = facts.clearances(self.size).C_2
+            except LookupError:
+                needed = d
+            if room < needed - 1e-9:
+                raise InputError(f"bolt {self.size.name} is too big for the gage: {units.printed(room)} in to the face beside it, "
+                                 f"{units.printed(needed)} in are needed to enter it")
+        if joint.rows < 2 and self.element.eccentricity is not None and self.inputs.U_by_hand is None:
+            raise ScopeError("one bolt per line: Table D3.1 case 2 needs a connection length, so no U applies; use at least 2 rows, "
+                             "or set U_by_hand with its basis")
+        self._refuse_eccentricity()
+
+    def _refuse_eccentricity(self):
+        joint = self.joint
+        if self.element.offset is None:
+            return
+        centre = sum(hole.y for hole in joint.pattern) / len(joint.pattern)
+        if abs(centre - self.element.offset) > 1 / 32:
+            raise ScopeError(f"the bolt group's centroid is {units.printed(abs(centre - self.element.offset))} in off the member's centroid; "
+                             "J1.7 asks for them to coincide, eccentric groups are outside this calculation")
+
+    # The joint that the inputs describe
+
+    def centres(self, rows=None, pitch=None):
+        """Return the hole centres on the connected element, x from the first row and y from the lower edge of the strip.
+
+        ``rows`` and ``pitch`` (which may be an array) replace the inputs' in a sweep.
+        """
+        given, part = self.inputs, self.element
+        back = part.back or 0.0
+        if given.holes:
+            if given.lines or given.rows or given.pitch or given.gage or given.stagger:
+                raise InputError("holes is given together with lines, rows, pitch, gage or stagger; give one or the other")
+            least = min(x for x, _ in given.holes)
+            return [(x - least, y - back) for x, y in given.holes]
+        if missing := [name for name in ("lines", "rows") if getattr(given, name) is None]:
+            raise InputError(f"input {missing[0]} is missing: give lines, rows, pitch and gage, or holes")
+        rows = given.rows if rows is None else rows
+        if given.pitch is None and given.rows > 1:
+            raise InputError("input pitch is missing: spacing along the line, for example 3 in")
+        if given.pitch is not None and given.pitch <= 0:
+            raise InputError(f"pitch = {units.printed(given.pitch)} in is not allowed; give a length greater than 0")
+        pitch = given.pitch if pitch is None else pitch
+        gages = list(given.gage) * (given.lines - 1) if len(given.gage) == 1 else list(given.gage)
+        if len(gages) != given.lines - 1:
+            raise InputError(f"gage: {given.lines} lines have {given.lines - 1} spaces between them, got {len(given.gage)}")
+        if part.back is None:
+            if given.gage_from_back is not None:
+                raise InputError(f"gage_from_back is for legs and stems; on the {part.name} of {part.member} the pattern is centred")
+            edge = centred_edge(part.width, given.lines, gages)
+        elif given.gage_from_back is None:
+            raise InputError(f"input gage_from_back is missing: back of the {part.name} to the first gage line")
+        else:
+            edge = given.gage_from_back - back
+        return grid(given.lines, rows, 0.0 if pitch is None else pitch, gages, given.stagger, edge)
+
+    def _joint(self, rows=None, pitch=None):
+        given, part = self.inputs, self.element
+        centres = self.centres(rows, pitch)
+        member_hole, plate_hole = self._hole(given.member_holes), self._hole(given.plate_holes)
+        holes = [Hole(x, y, *member_hole, part.t) for x, y in centres]
+        if given.other_leg_holes:
+            if part.name not in ("leg", "long leg", "short leg"):
+                raise InputError(f"other_leg_holes is for angles; {part.member} is none")
+            standard = self._hole("STD")
+            holes += [Hole(x, -(y - part.t), *standard, part.t, bolted=False) for x, y in given.other_leg_holes]
+        last = _most(x for x, _ in centres)
+        member = Ply("member", self.member_material.F_y, self.member_material.F_u, part.t, part.plies, part.pieces, tuple(holes),
+                     End(last + given.member_end), part.width, given.member_holes)
+        axis = (centres_low(centres) + centres_high(centres)) / 2
+        y_lo = axis - given.plate_width / 2 - given.plate_offset
+        shifted = [Hole(x, y - y_lo, *plate_hole, given.plate_thickness) for x, y in centres]
+        slope = 1 / math.tan(given.plate_edge_angle)
+        slope = 0.0 if abs(slope) < 1e-9 else slope
+        edge = End(given.plate_end - slope * (axis - y_lo), slope)
+        plate = Ply("plate", self.plate_material.F_y, self.plate_material.F_u, given.plate_thickness, given.plates,
+                    given.plates * part.joints, tuple(mirrored(shifted)), edge, given.plate_width, given.plate_holes)
+        n_s = part.plies + given.plates - 1
+        group = self.bolt_group
+        slip_critical = given.installation == "slip-critical"
+        bolts = Bolts(self.size.name, group.name, self.size.d, group.F_nv_X if given.threads == "X" else group.F_nv_N, given.threads, n_s,
+                      facts.pretension(self.size, group) if slip_critical else 0.0, given.installation,
+                      {"A": 0.30, "B": 0.50}.get(given.slip_class, 0.0))
+        gap = 0.0 if given.gap is None else (given.gap - given.plate_thickness) / 2
+        t_filler, n_fillers = given.filler_thickness + gap, given.fillers + (1 if gap > 1e-9 else 0)
+        return Joint(part, member, plate, bolts, self._gusset(), t_filler, n_fillers, given.deformation_considered, given.U_by_hand, given.U_basis)
+
+    def _hole(self, kind):
+        """Return (across, along) of a hole as written in the inputs. [in]"""
+        name, _, direction = kind.partition(" ")
+        hole = facts.hole(self.size, name)
+        return (hole.length, hole.width) if direction == "across" else (hole.width, hole.length)
+
+    def _gusset(self):
+        given = self.inputs
+        support, K, length = given.gusset_support, given.gusset_K, given.gusset_length
+        basis = ""
+        if support == "by hand":
+            if K is None or len(given.gusset_K_basis.strip()) < 10:
+                raise InputError("gusset_support = 'by hand' needs gusset_K and a written basis in gusset_K_basis")
+            basis = f"K by hand. Basis: {given.gusset_K_basis}"
+        elif support is not None:
+            if support not in gusset.K_CHOICES:
+                raise InputError(f"gusset_support = {support!r} is not known; allowed: {', '.join((*gusset.K_CHOICES, 'by hand'))}")
+            K, basis = gusset.K_CHOICES[support]
+        if self.demand.required_compression > 0:
+            if support is None:
+                raise InputError(f"the member goes into compression ({units.printed(self.demand.required_compression)} kip): give gusset_support "
+                                 f"({', '.join((*gusset.K_CHOICES, 'by hand'))}) and gusset_length")
+            if length is None and K is not None:
+                raise InputError("input gusset_length is missing: last row to the support, along the load")
+        return Gusset(given.plate_width, 0.0, given.plate_width, K, length, basis)
+
+    # The checks
+
+    def limit_states(self, joint):
+        """Return (id, title, part, clause, limit state, axial, evaluate) of every strength in tension; ``joint`` may hold arrays."""
+        edition = self.basis.edition
+        shear, bearing, slip = CLAUSES["bolt shear"][edition], CLAUSES["bearing and tearout"][edition], CLAUSES["slip"][edition]
+        rows = [
+            ("member yielding", "Member, yielding of the gross section", "member", "D2(a)", "yielding", True, net_section.gross_yielding),
+            ("member rupture", "Member, rupture of the net section", "member", "D2(b), D3", "rupture", True, net_section.net_rupture),
+            ("member block", "Member, block shear", "member", "J4.3", "block shear", False,
+             lambda j: tear_out.block_shear(j.member, tear_out.member_part(j))),
+            ("bolt shear", "Bolts, shear", "bolts", shear, "bolts", False, bolt_group.shear_alone),
+            ("bolts member", "Bolts with member holes: shear, bearing, tearout", "bolts", f"{shear}, {bearing}", "bolts", False,
+             lambda j: bolt_group.at_holes(j, j.member)),
+            ("bolts plate", "Bolts with plate holes: shear, bearing, tearout", "bolts", f"{shear}, {bearing}", "bolts", False,
+             lambda j: bolt_group.at_holes(j, j.plate)),
+        ]
+        if joint.bolts.T_b:
+            rows.append(("slip", "Slip", "bolts", slip, bolt_group.slip_factor(joint), False, bolt_group.slip))
+        return [
+            *rows,
+            ("plate yielding", "Plate, yielding of the gross section", "plate", "J4.1(a)", "yielding", True, gusset.gross_yielding),
+            ("plate rupture", "Plate, rupture of the net section", "plate", "J4.1(b)", "rupture", True,
+             lambda j: net_section.plate_rupture(j, j.plate)),
+            ("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "yielding", True, gusset.whitmore_yielding),
+            ("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "rupture", True, gusset.whitmore_rupture),
+            ("plate block", "Plate, block shear", "plate", "J4.3", "block shear", False,
+             lambda j: tear_out.block_shear(j.plate, tear_out.plate_part(j))),
+        ]
+
+    def _checks(self):
+        joint, T, C = self.joint, self.demand.required_tension, self.demand.required_compression
+        method, edition = self.basis.method, self.basis.edition
+        for id, title, part, clause, state, axial, evaluate in self.limit_states(joint):
+            if id == "plate yielding" and not joint.bolts.T_b:
+                yield not_applicable("slip", "Slip", "bolts", CLAUSES["slip"][edition], f"joint designed in bearing ({self.inputs.installation})")
+            found = evaluate(joint)
+            notes = (*found.notes, *(bolt_group.stricter_note(joint) if id == "bolts plate" else ()))
+            demand = max(T, C) if id in ("bolt shear", "slip") else T
+            yield strength_check(id, title, part, clause, state, method, found.nominal, demand, found.steps, axial, path=found.path, notes=notes)
+        yield from self._compression_checks(C)
+        yield details.minimum_spacing(joint, edition)
+        yield details.maximum_spacing(joint, edition, self.inputs.bare_weathering)
+        held = {attachment.y for attachment in self.element.attachments}
+        yield from details.edges(joint, joint.member, self.size, edition, (0.0 not in held, self.element.width not in held))
+        yield from details.edges(joint, joint.plate, self.size, edition, (True, True))
+        yield details.tightening(joint, self.size)
+        yield details.slenderness(self.element, self.inputs.member_length)
+
+    def _compression_checks(self, C):
+        joint, method = self.joint, self.basis.method
+        clause = f"{CLAUSES['bolt shear'][self.basis.edition]}, {CLAUSES['bearing and tearout'][self.basis.edition]}"
+        rows = [("bolts member reversed", "Bolts with member holes, compression", clause, "bolts", False,
+                 lambda: bolt_group.at_holes(joint, joint.member, reversed_load=True)),
+                ("bolts plate reversed", "Bolts with plate holes, compression", clause, "bolts", False,
+                 lambda: bolt_group.at_holes(joint, joint.plate, reversed_load=True)),
+                ("gusset compression", "Plate, compression on the Whitmore width", "J4.4", "compression", True, lambda: gusset.compression(joint))]
+        for id, title, clause, state, axial, evaluate in rows:
+            part = "plate" if id == "gusset compression" else "bolts"
+            if C <= 0:
+                yield not_applicable(id, title, part, clause, "no combination gives compression")
+                continue
+            found = evaluate()
+            yield strength_check(id, title, part, clause, state, method, found.nominal, C, found.steps, axial, tension=False)
+
+    # What the report says beside the checks
+
+    def assumptions(self):
+        """Return (text, basis) of what the calculation takes for granted."""
+        given, joint = self.inputs, self.joint
+        notes = [(f"Threads {'excluded from' if given.threads == 'X' else 'in'} the shear plane ({given.threads}).", "input"),
+                 (f"Bolts installed {given.installation}; {joint.bolts.n_s} shear plane{'s' if joint.bolts.n_s > 1 else ''}.", "input"),
+                 ("The bolts of a group share the load equally; strengths of bolts with their holes are summed.",
+                  f"{CLAUSES['bolt shear'][self.basis.edition]}, User Note"),
+                 ("No credit is taken for diagonals in the tension plane of a tear-out block.", "conservative"),
+                 ("Tension over a tear-out block is uniform, U_bs = 1.0.", "Commentary J4.3")]
+        for material, part in ((self.member_material, "Member"), (self.plate_material, "Plate")):
+            if material.note:
+                notes.append((f"{part} steel {material.name}: {material.note}", "availability, from memory"))
+        notes += [(text, "bolt tables") for text in (*facts.size_notes(self.size, self.bolt_group), *self.bolt_group.notes)]
+        notes += [(text, "loads") for text in getattr(self.demand, "notes", ())]
+        if self.element.series in ("L", "2L") or self.element.name == "stem":
+            notes.append((f"Eccentricity between the gage line and the centroid of the {self.element.member} is not regarded.", "J1.7"))
+        if given.U_by_hand is not None:
+            notes.append((f"U = {given.U_by_hand:g} set by the engineer: {given.U_basis}", "engineer"))
+        if joint.t_filler:
+            notes.append((f"Fillers of {units.fraction(joint.t_filler)} in at a shear plane, not developed outside the joint.", "input"))
+        return [*super().assumptions(), *notes]
+
+    def materials_text(self):
+        """Return the steels with their strengths, in a sentence."""
+        parts = ((f"member {self.element.member}", self.member_material), ("plate", self.plate_material))
+        return "; ".join(f"{part}: {m.name}, F_y {m.F_y:g} ksi, F_u {m.F_u:g} ksi" for part, m in parts)
+
+    def by_others(self):
+        """Return what the scope leaves to others."""
+        out = ["the edge of the connection plate at its support: weld or bolts, and the support itself",
+               "bending from eccentricity of the connection in and out of its plane", "fatigue, seismic detailing, corrosion and fire"]
+        if self.demand.required_compression > 0:
+            out.insert(0, "the member in compression between its ends")
+        return tuple(out)
+
+    def designed(self):
+        """Return (item, what is to be built) rows for comparison with the drawings."""
+        given, joint = self.inputs, self.joint
+        n = joint.n_bolts
+        return [("Member", f"{self.element.member}, {self.member_material.name}, bolted through {'the ' if self.element.joints == 1 else 'both '}"
+                           f"{self.element.name}{'s' if self.element.joints == 2 else ''}"),
+                ("Plates", f"{joint.plate.pieces} PL {units.fraction(given.plate_thickness)} x {units.fraction(given.plate_width)}, {self.plate_material.name}"),
+                ("Bolts", f"{n} bolts {self.size.name}{'' if self.size.metric else ' in'}, {self.bolt_group.product or self.bolt_group.name}"
+                          f"-{given.threads}, {given.installation}"
+                          + (f", faying surface class {given.slip_class}" if given.slip_class else "")),
+                ("Holes", f"member {given.member_holes}, plate {given.plate_holes}"),
+                ("Bolt length", self._bolt_length())]
+
+    def _bolt_length(self):
+        part, given = self.element, self.inputs
+        grip = part.plies * part.t + given.plates * given.plate_thickness + (self.joint.n_fillers and self.joint.t_filler * self.joint.bolts.n_s)
+        try:
+            least = grip + facts.bolt_length_addition(self.size) + facts.WASHER
+        except LookupError:
+            return f"grip {units.printed(grip)} in; length by the supplier"
+        return f"grip {units.printed(grip)} in; {units.fraction(math.ceil(least * 4 - 1e-9) / 4)} in with one washer (common practice)"
+
+    def at(self, rows=None, pitch=None):
+        """Return the joint with another number of rows or another pitch (which may be an array), unvalidated, for a sweep."""
+        return self._joint(rows, pitch)
+
+
+def centres_low(centres):
+    """Return the least y of hole centres. [in]"""
+    return min(y for _, y in centres)
+
+
+def centres_high(centres):
+    """Return the greatest y of hole centres. [in]"""
+    return max(y for _, y in centres)
+
+
+def _most(values):
+    values = list(values)
+    return np.maximum.reduce(values) if any(isinstance(value, np.ndarray) for value in values) else max(values)
+

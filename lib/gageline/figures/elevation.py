@@ -1,0 +1,582 @@
+"""Elevation of a connection on the connected element, drawn from the joint that is computed, and what tears or ruptures in it."""
+
+import math
+from dataclasses import dataclass
+
+from ..check import worst_first
+from ..geometry import Block, Chain, lines_of, polyline
+from ..units import ceil_figures, fraction, ratio_text
+from . import style
+from .drafting import Drawing, broken, grouped
+
+PATHS = (("member rupture",), ("member block",), ("plate rupture",), ("plate block",), ("Whitmore yielding", "Whitmore rupture"))
+"""Checks with a path to draw; of those in one entry, which share a path, the one with the larger ratio."""
+
+TALLEST = 3.7  # [in] of an elevation on paper: a figure, its caption and some text fit one sheet
+LARGEST = 0.38  # scale beyond which a small pattern looks coarse
+BACK_OFF = 1.15  # plate drawn beside the member, as a part of the member's depth, before it is broken off
+
+
+@dataclass(frozen=True)
+class View:
+    """What an elevation shows, in the joint's own coordinates. [in]
+
+    Parameters
+    ----------
+    lo, hi : lower and upper outline of the member. features : y of its inner edges (a stem, a heel, flanges).
+    unfolded : y to which an outstanding leg with open holes is unfolded, or None.
+    left, end : where the member is broken off, where it ends.
+    plate_lo, plate_hi : the plate's edges. shown_lo, shown_hi : how far it is drawn. right : where it is broken off or supported.
+    support : x of the support, or None where it is not drawn.
+    """
+
+    joint: object
+    lo: float
+    hi: float
+    features: tuple
+    unfolded: float | None
+    left: float
+    end: float
+    plate_lo: float
+    plate_hi: float
+    shown_lo: float
+    shown_hi: float
+    right: float
+    support: float | None
+
+    @property
+    def bottom(self):
+        """Lowest y drawn."""
+        return min(self.lo, self.shown_lo, self.lo if self.unfolded is None else self.unfolded)
+
+    @property
+    def top(self):
+        """Highest y drawn."""
+        return max(self.hi, self.shown_hi)
+
+    @property
+    def axis(self):
+        """y halfway between the outer gage lines."""
+        ys = [hole.y for hole in self.joint.pattern]
+        return (min(ys) + max(ys)) / 2
+
+    def free_edge(self, y):
+        """x of the plate's free edge at the height y."""
+        return -self.joint.plate.end.at(y - self.plate_lo)
+
+    @property
+    def wide(self):
+        """(least x, greatest x) drawn."""
+        edges = [self.free_edge(y) for y in (self.shown_lo, self.shown_hi)]
+        return min(self.left, *edges), max(self.right, self.end)
+
+
+@dataclass(frozen=True)
+class Trace:
+    """The path of a check in the joint's own coordinates: filled polygons, lines sheared and lines torn, thin lines. [in]"""
+
+    part: str
+    pieces: tuple = ()
+    shear: tuple = ()
+    torn: tuple = ()
+    spread: tuple = ()
+
+    @property
+    def ys(self):
+        """Every y of its polygons and spread, which have to be drawn whole."""
+        return [y for line in (*self.pieces, *self.spread) for _, y in line]
+
+
+def trace(joint, check):
+    """Return the Trace of a check's path.
+
+    Parameters
+    ----------
+    joint : the joint. check : a Check whose path is a Chain, a Block or a Whitmore width.
+    """
+    path, part = check.path, check.part
+    y0 = _plate_lo(joint)
+
+    def placed(points):
+        return tuple((-x, y + y0) for x, y in points) if part == "plate" else tuple(points)
+
+    if isinstance(path, Block):
+        shear = tuple(placed([(plane.x0, plane.y), (plane.x1, plane.y)]) for plane in path.shear)
+        torn = tuple(placed([(plane.x0, plane.y0), (plane.x1, plane.y1)]) for plane in path.tension if plane.y0 != plane.y1)
+        return Trace(part, tuple(placed(piece) for piece in path.outline), shear, torn)
+    if isinstance(path, Chain):
+        ply = joint.plate if part == "plate" else joint.member
+        corners = list(polyline(path, ply.holes, ply.width))
+        if part == "member":
+            low, high = _outline(joint.element)
+            unfolded = _unfolded(joint)
+            bottom = low if unfolded is None or min(ply.holes[i].y for i in path.holes) >= 0 else unfolded
+            corners[0], corners[-1] = (corners[0][0], bottom), (corners[-1][0], high)
+        return Trace(part, torn=(placed(corners),))
+    lines = tuple(tuple((x, y + y0) for x, y in line) for line in path.lines)
+    width = ((path.x_row, path.y_lo + y0), (path.x_row, path.y_hi + y0))
+    return Trace(part, torn=(width,), spread=lines)
+
+
+def shown_check(connection):
+    """Return the check an elevation shows: the governing one if it has a path, else the member's path with the largest ratio."""
+    if connection.governing.path is not None:
+        return connection.governing
+    drawn = [check for check in connection.checks if check.path is not None and check.kind == "strength"]
+    return next(iter(worst_first([check for check in drawn if check.part == "member"]) or worst_first(drawn)), None)
+
+
+def _plate_lo(joint):
+    return joint.pattern[0].y - joint.plate.holes[0].y
+
+
+def _outline(element):
+    """Lower and upper outline of the member: the strip, and a flange in whose thickness the strip ends."""
+    shape = element.section
+    if element.name == "web":
+        return -shape.t_f, element.width + shape.t_f
+    if element.name == "stem":
+        return -shape.t_f, element.width
+    return 0.0, element.width
+
+
+def _unfolded(joint):
+    element = joint.element
+    if all(hole.y >= 0 for hole in joint.member.holes):
+        return None
+    single = element.section.single or element.section
+    return single.t - (single.b_long + single.b_short - element.width)
+
+
+def view(joint, path=None):
+    """Return the View of a joint that shows a Trace whole and breaks off what is far from the member."""
+    element, xs = joint.element, [hole.x for hole in joint.pattern]
+    lo, hi = _outline(element)
+    plate_lo = _plate_lo(joint)
+    plate_hi = plate_lo + joint.plate.width
+    depth = hi - lo
+    must = path.ys if path else []
+    room = max(BACK_OFF * depth, 0.45 * (max(xs) - min(xs)))
+    shown_lo = plate_lo if lo - plate_lo <= room else min(lo - 0.6 * room, *(y - 0.08 * depth for y in must), lo)
+    shown_hi = plate_hi if plate_hi - hi <= room else max(hi + 0.6 * room, *(y + 0.08 * depth for y in must), hi)
+    shown_lo, shown_hi = max(shown_lo, plate_lo), min(shown_hi, plate_hi)
+    end = joint.member.end.at(0.0)
+
+    def edge(y):
+        return -joint.plate.end.at(y - plate_lo)
+
+    over = [edge(y) for y in (max(lo, shown_lo), min(hi, shown_hi))]
+    core = end - min(min(xs), *over)
+    left = min(min(xs), *over) - max(0.2 * core, 0.16 * depth, 1.2)
+    right = max(end, *(edge(y) for y in (shown_lo, shown_hi))) + max(0.13 * core, 0.1 * depth, 1.0)
+    support = max(xs) + joint.gusset.length if joint.gusset.length is not None else None
+    if support is not None and not end < support <= end + 0.8 * core + 2:
+        support = None
+    features = tuple(y for y in element.faces if lo < y < hi)
+    return View(joint, lo, hi, features, _unfolded(joint), left, end, plate_lo, plate_hi, shown_lo, shown_hi, support or right, support)
+
+
+def draw(paper, seen, path, numbers=True):
+    """Draw member, plate, holes and the Trace of a path on a Drawing."""
+    plate_first = path is not None and path.part == "plate"
+    bodies = {"member": _member_body(paper, seen), "plate": _plate_body(paper, seen)}
+    back, front = ("member", "plate") if plate_first else ("plate", "member")
+    paper.fill(bodies[back][0], style.PAPER, 1.0)
+    _edges(paper, bodies[back][1:], 1.2)
+    cover = paper.fill(bodies[front][0], style.LIGHT, 2.0, gid=f"{front}-body")
+    _edges(paper, bodies[back][1:], 2.2, hidden_by=cover)
+    _edges(paper, bodies[front][1:], 4.0)
+    if seen.unfolded is not None:
+        corners = [(seen.left, seen.lo), (seen.left, seen.unfolded), (seen.end, seen.unfolded), (seen.end, seen.lo)]
+        paper.line(corners, style.THIN, style.PHANTOM, z=3)
+    _holes(paper, seen, front, numbers)
+    if path is not None:
+        _path(paper, path, cover)
+
+
+def _member_body(paper, seen):
+    cut = broken((seen.left, seen.lo), (seen.left, seen.hi), paper.pt(3.5))
+    body = [*cut, (seen.end, seen.hi), (seen.end, seen.lo)]
+    outline = [[(seen.left, seen.lo), (seen.end, seen.lo), (seen.end, seen.hi), (seen.left, seen.hi)]]
+    return body, outline, [cut], [[(seen.left, y), (seen.end, y)] for y in seen.features]
+
+
+def _plate_body(paper, seen):
+    lo, hi, amplitude = seen.shown_lo, seen.shown_hi, paper.pt(3.5)
+    edge_lo, edge_hi = seen.free_edge(lo), seen.free_edge(hi)
+    right = [(seen.right, lo), (seen.right, hi)] if seen.support else broken((seen.right, lo), (seen.right, hi), amplitude, at=0.73)
+    below = [(edge_lo, lo), (seen.right, lo)]
+    above = [(seen.right, hi), (edge_hi, hi)]
+    outline, cuts = [[(edge_lo, lo), (edge_hi, hi)]], [] if seen.support else [right]
+    if lo > seen.plate_lo + 1e-9:
+        below = broken(*below, amplitude, upright=False, at=0.8)
+        cuts.append(below)
+    else:
+        outline.append(below)
+    if hi < seen.plate_hi - 1e-9:
+        above = broken(*above, amplitude, upright=False, at=0.2)
+        cuts.append(above)
+    else:
+        outline.append(above)
+    return [*below, *right[1:-1], *above], outline, cuts, []
+
+
+def _edges(paper, lines, z, hidden_by=None):
+    outline, cuts, features = lines
+    for corners in outline:
+        paper.line(corners, style.THIN if hidden_by else style.OUTLINE, style.HIDDEN if hidden_by else "-", z=z, within=hidden_by)
+    for corners in features:
+        paper.line(corners, style.THIN, style.HIDDEN if hidden_by else "-", z=z, within=hidden_by)
+    for corners in cuts:
+        if not hidden_by:
+            paper.line(corners, style.THIN, z=z)
+
+
+def _holes(paper, seen, front, numbers):
+    joint = seen.joint
+    at_front, at_back = (joint.plate, joint.member) if front == "plate" else (joint.member, joint.plate)
+    alike = at_front.kind == at_back.kind
+    pattern = joint.pattern
+    xs = [hole.x for hole in pattern]
+    for line in lines_of(pattern):
+        y, past = pattern[line[0]].y, paper.pt(9)
+        paper.line([(min(xs) - past, y), (max(xs) + past, y)], style.HAIR, style.CENTRE, z=5)
+    numbered = _numbered(paper, joint) if numbers else ()
+    for i, bolt in enumerate(pattern):
+        hole, other = at_front.bolted[i], at_back.bolted[i]
+        paper.hole(bolt.x, bolt.y, hole.across, hole.along, gid=f"hole-{i + 1}")
+        if not alike:
+            paper.hole(bolt.x, bolt.y, other.across, other.along, fill=None, dash=style.HIDDEN, weight=style.THIN, z=6.1)
+        if max(hole.across, hole.along) > joint.bolts.d + 0.12:
+            paper.hole(bolt.x, bolt.y, joint.bolts.d, joint.bolts.d, fill=style.FAINT, weight=style.THIN, z=6.2)
+        reach = paper.pt(2.0)
+        wide, tall = hole.along / 2 + reach, hole.across / 2 + reach
+        paper.line([(bolt.x - wide, bolt.y), (bolt.x + wide, bolt.y)], style.HAIR, z=6.5)
+        paper.line([(bolt.x, bolt.y - tall), (bolt.x, bolt.y + tall)], style.HAIR, z=6.5)
+        if i in numbered:
+            off = 0.36 * min(hole.across, hole.along)
+            paper.text(bolt.x + max(off, hole.along / 2 - 0.2 * hole.across) + paper.pt(1.6), bolt.y + max(off, hole.across / 2 - 0.2 * hole.along)
+                       + paper.pt(1.2), str(i + 1), style.TINY, z=8.5)
+    for hole in joint.member.holes:
+        if not hole.bolted:
+            paper.hole(hole.x, hole.y, hole.across, hole.along)
+            reach = hole.along / 2 + paper.pt(2.0)
+            paper.line([(hole.x - reach, hole.y), (hole.x + reach, hole.y)], style.HAIR, z=6.5)
+            paper.line([(hole.x, hole.y - reach), (hole.x, hole.y + reach)], style.HAIR, z=6.5)
+    if numbers and seen.unfolded is not None:
+        paper.text(seen.end - paper.pt(3), seen.unfolded + paper.pt(4), "outstanding leg unfolded, open holes", style.TINY, "right")
+
+
+def _numbered(paper, joint):
+    """Indices of the bolts that there is room to number: all, or the first and the last of each line."""
+    lines = lines_of(joint.pattern)
+    spaces = [joint.pattern[b].x - joint.pattern[a].x for line in lines for a, b in zip(line, line[1:])]
+    room = min(spaces, default=math.inf) / paper.pt()
+    ys = [joint.pattern[line[0]].y for line in lines]
+    if min((b - a for a, b in zip(ys, ys[1:])), default=math.inf) < paper.pt(2 * style.TINY):
+        return ()
+    if room >= joint.member.hole.along / 2 / paper.pt() + 4 + style.text_width(str(joint.n_bolts), style.TINY):
+        return range(len(joint.pattern))
+    return {i for line in lines for i in (line[0], line[-1])}
+
+
+def _path(paper, path, cover):
+    for k, piece in enumerate(path.pieces, start=1):
+        paper.fill(piece, style.SHADE, 2.6, gid=f"block-{k}")
+    for line in path.spread:
+        paper.line(line, 0.8, style.PHANTOM, style.ACCENT, z=6.8)
+    for line in path.torn:
+        paper.line(line, style.HEAVY, style.TORN if path.pieces else "-", style.ACCENT, z=6.9, gid="torn",
+                   within=None if path.pieces or path.part == "member" else cover)
+    for line in path.shear:
+        paper.line(line, style.HEAVY, "-", style.ACCENT, z=6.9, gid="sheared")
+
+
+def _fit(seen, left, right, below, above, widest, tallest):
+    """Scale at which a View with margins in points fits a width and a height. [in]"""
+    x0, x1 = seen.wide
+    return min((widest - (left + right) / 72) / (x1 - x0), (tallest - (below + above) / 72) / (seen.top - seen.bottom), LARGEST)
+
+
+def _chains(seen):
+    """(stops, texts, starts) of the chain along the load, and of the chains across it: member, member in all, plate, plate in all."""
+    joint = seen.joint
+    xs = sorted({round(hole.x, 6) for hole in joint.pattern})
+    along = [seen.free_edge(seen.axis), *xs, seen.end]
+    ys = [joint.pattern[line[0]].y for line in lines_of(joint.pattern)]
+    member, plate = [seen.lo, *ys, seen.hi], [seen.plate_lo, ys[0], ys[-1], seen.plate_hi]
+    up = [(*grouped(member, 3), seen.end), ([seen.lo, seen.hi], None, seen.end)]
+    if seen.shown_lo == seen.plate_lo and seen.shown_hi == seen.plate_hi:
+        if abs(seen.plate_lo - seen.lo) > 1e-6 or abs(seen.plate_hi - seen.hi) > 1e-6:
+            up += [(sorted(set(plate)), None, seen.right), ([seen.plate_lo, seen.plate_hi], None, seen.right)]
+    return grouped(along), up
+
+
+def elevation_canvas(connection, check=None):
+    """Return the matplotlib Figure of an elevation; its first axes are in the joint's own inches.
+
+    Parameters
+    ----------
+    connection : a bolted connection.
+    check : the Check whose path is shaded; by default ``shown_check``.
+    """
+    joint = connection.joint
+    path = None if check is None or check.path is None else trace(joint, check)
+    seen = view(joint, path)
+    (along, texts), up = _chains(seen)
+    force = _force(connection)
+    left = max(style.text_width(line, style.TYPE) for line in force) + 14
+    right, above, below = 15 * len(up) + 10, 40 if joint.length else 24, 32 if not seen.support else 48
+    for _ in range(2):  # the texts that do not fit their space, and so the margins, depend on the scale
+        scale = _fit(seen, left, right, below, above, style.TEXT_WIDTH, TALLEST)
+        x0, x1 = seen.wide
+        paper_at = _Scale(scale)
+        rows = [paper_at.rows(stops, words) for stops, words, _ in up]
+        right = sum(15 + 8 * (n - 1) for n in rows) + 8
+        above = (40 if joint.length else 24) + 8 * (paper_at.rows(along, texts) - 1)
+    width, height = (x1 - x0) * scale + (left + right) / 72, (seen.top - seen.bottom) * scale + (below + above) / 72
+    figure = style.canvas(width, height)
+    pt = 1 / 72 / scale
+    paper = Drawing(figure, (0, 0, width, height), (x0 - left * pt, seen.bottom - below * pt), scale)
+    draw(paper, seen, path)
+    _dimension(paper, seen, along, texts, up, rows)
+    _annotate(paper, seen, connection, force)
+    return figure
+
+
+class _Scale(Drawing):
+    """A Drawing before there is paper, for measuring."""
+
+    def __init__(self, scale):
+        self.scale = scale
+
+
+def _dimension(paper, seen, along, texts, up, rows):
+    joint, pt = seen.joint, paper.pt
+    level = seen.top + pt(13)
+    starts = []
+    for k, stop in enumerate(along):
+        if k == 0:
+            skewed = joint.plate.end.slope != 0.0
+            starts.append(seen.axis if skewed else max(seen.shown_hi, seen.hi) if seen.shown_hi >= seen.hi else seen.shown_hi)
+        elif k == len(along) - 1:
+            starts.append(seen.hi)
+        else:
+            at = [hole for hole in joint.pattern if abs(hole.x - stop) < 1e-5]
+            starts.append(max(hole.y + hole.across / 2 for hole in at) + pt(1))
+    paper.across(along, level, starts, texts)
+    if joint.length:
+        first, last = min(h.x for h in joint.pattern), max(h.x for h in joint.pattern)
+        level += pt(15 + 8 * (paper.rows(along, texts) - 1))
+        paper.across([first, last], level, [level - pt(12)] * 2, [f"l = {fraction(last - first)}"])
+    x = seen.wide[1]
+    for k, ((stops, words, start), n) in enumerate(zip(up, rows)):
+        x += pt(15 + 8 * (n - 1))
+        begin = [start] * len(stops)
+        if k == 0:
+            outer = {line_y: max(h.x + h.along / 2 for h in joint.pattern if abs(h.y - line_y) < 1e-5) + pt(7) for line_y in stops[1:-1]}
+            begin = [start, *(outer[y] for y in stops[1:-1]), start]
+        elif k == 1:
+            begin = [x - pt(11)] * 2
+        elif k == 3:
+            begin = [x - pt(11)] * 2
+        elif k == 2:
+            begin = [start if y in (seen.plate_lo, seen.plate_hi) else x - pt(11) for y in stops]
+        paper.up(stops, x, begin, words)
+    if seen.support:
+        last = max(h.x for h in joint.pattern)
+        level = seen.bottom - pt(15)
+        low = min(h.y - h.across / 2 for h in joint.pattern if abs(h.x - last) < 1e-5)
+        paper.across([last, seen.support], level, [low - pt(1), seen.shown_lo], [f"{fraction(seen.support - last)} to the support"])
+
+
+def _annotate(paper, seen, connection, force):
+    pt, joint = paper.pt, seen.joint
+    y, x = seen.axis, seen.left - pt(7)
+    x = min(x, seen.wide[0] + pt(2)) if seen.wide[0] < seen.left else x
+    tail, head = x, x - pt(40)
+    paper.arrow((tail, y), (head, y))
+    paper.text((tail + head) / 2 - pt(2), y + pt(5), force[0], ha="center")
+    if len(force) > 1:
+        paper.text((tail + head) / 2 - pt(2), y - pt(12), force[1], ha="center")
+    if seen.support:
+        paper.line([(seen.support, seen.shown_lo), (seen.support, seen.shown_hi)], 1.6, z=4.5)
+        step, at = pt(6), seen.shown_lo
+        while at < seen.shown_hi - pt(1):
+            rise = min(step * 0.8, seen.shown_hi - at)
+            paper.line([(seen.support, at), (seen.support + rise, at + rise)], style.HAIR, z=4.5)
+            at += step
+    if joint.plate.end.slope:
+        _skew(paper, seen)
+    base = seen.bottom - pt(22 if not seen.support else 38)
+    _labels(paper, seen, connection, base)
+
+
+def _skew(paper, seen):
+    """The angle between the load and the free edge, in the plate's corner where that angle lies inside the plate."""
+    slope = seen.joint.plate.end.slope
+    angle = math.degrees(math.atan2(1.0, slope))
+    corner = (seen.free_edge(seen.shown_hi), seen.shown_hi)
+    radius = paper.pt(20)
+    arc = [(corner[0] + radius * math.cos(a), corner[1] - radius * math.sin(a)) for a in
+           (math.radians(angle) * k / 24 for k in range(25))]
+    paper.line(arc, style.THIN, z=4.4)
+    half = math.radians(angle / 2)
+    reach = paper.pt(31)
+    paper.text(corner[0] + reach * math.cos(half), corner[1] - reach * math.sin(half), f"{angle:.4g}°", style.SMALL, "center", middle=True)
+
+
+def _labels(paper, seen, connection, base):
+    joint, pt = seen.joint, paper.pt
+    given = connection.inputs
+    plate = f"PL {fraction(given.plate_thickness)} x {fraction(given.plate_width)}"
+    if given.plates == 2:
+        plate = f"2 {plate}, near one not shown"
+    elif seen.shown_lo > seen.plate_lo or seen.shown_hi < seen.plate_hi:
+        plate += ", broken off"
+    bolts = f"{joint.n_bolts} bolt{'s' if joint.n_bolts > 1 else ''} {_bolt_size(connection)}, {connection.bolt_group.product or connection.bolt_group.name}-{joint.bolts.threads}"
+    low = _pointed_at(joint)
+    texts = [(seen.left, "left", joint.element.member), (None, "center", bolts), (seen.wide[1], "right", plate)]
+    wide = [pt(style.text_width(text, style.TYPE)) for _, _, text in texts]
+    member_x = seen.left + min(wide[0] / 2, pt(14))
+    start, stop = seen.left - pt(6), seen.wide[1] + pt(4)
+    centre = min(max(low.x, start + wide[0] + pt(14) + wide[1] / 2), stop - wide[2] - pt(14) - wide[1] / 2)
+    fits = start + wide[0] + wide[1] + wide[2] + pt(28) <= stop
+    paper.text(start, base, texts[0][2])
+    paper.line([(member_x, base + pt(8)), (member_x, seen.lo)], style.HAIR, z=4.6)
+    plate_x = stop - min(wide[2] / 2, pt(14))
+    foot = seen.shown_lo
+    paper.text(stop, base, plate, ha="right")
+    paper.line([(plate_x, base + pt(8)), (min(plate_x, seen.right - pt(3)), foot)], style.HAIR, z=4.6)
+    if fits:
+        paper.text(centre, base, bolts, ha="center")
+        r = joint.member.hole.across / 2
+        paper.line([(low.x + (0.3 * (centre - low.x) if centre != low.x else 0), base + pt(8)), (low.x, low.y - r - pt(2.5))], style.HAIR, z=4.6)
+
+
+def _pointed_at(joint):
+    """The bolt of the lowest line that a leader from below reaches best: near the middle, over no open hole."""
+    line = lines_of(joint.pattern)[0]
+    bolts = [joint.pattern[i] for i in line]
+    barred = [hole.x for hole in joint.member.holes if not hole.bolted]
+    free = [bolt for bolt in bolts if all(abs(bolt.x - x) > bolt.along for x in barred)] or bolts
+    return min(free, key=lambda bolt: (abs(bolt.x - (bolts[0].x + bolts[-1].x) / 2), bolt.x))
+
+
+def _bolt_size(connection):
+    return connection.size.name if connection.size.metric else fraction(connection.size.d)
+
+
+def _force(connection):
+    sign = "Pᵤ" if connection.basis.method == "LRFD" else "Pₐ"
+    demand = connection.demand
+    lines = [f"{sign} = {ceil_figures(demand.required_tension)} kip"]
+    if demand.required_compression > 0:
+        lines.append(f"(−{ceil_figures(demand.required_compression)} kip)")
+    return lines
+
+
+def described(check):
+    """Return (what is shaded, in words; what the line styles mean) of a check's path."""
+    path = check.path
+    if isinstance(path, Block):
+        return f"tear-out block, {path.label}", "Heavy lines: sheared solid, torn dashed."
+    if isinstance(path, Chain):
+        n, kind = len(path.holes), "zigzag" if path.zigzags else "straight"
+        ahead = f", {path.n_ahead} of {path.n_total} bolts on its load side" if path.n_ahead else ""
+        return f"{kind} chain of {n} hole{'s' if n > 1 else ''}{ahead}", ""
+    return f"Whitmore width of {path.L_w:.4g} in, spread at 30°", ""
+
+
+def elevation(connection, check=None):
+    """Draw the connection on its connected element, to scale, with the path of one check.
+
+    Parameters
+    ----------
+    connection : a bolted connection.
+    check : the Check whose path is shaded; by default the governing one if it has a path, else the member's weakest path.
+
+    Returns
+    -------
+    figure : style.Figure.
+    """
+    check = check or shown_check(connection)
+    with style.house():
+        drawn = elevation_canvas(connection, check)
+        svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
+    joint, element = connection.joint, connection.joint.element
+    seen_from = {"flange": " seen from the side of the " + ("stem" if element.joints == 1 else "web, one of two alike")}.get(element.name, "")
+    caption = f"Elevation on the {element.name}{seen_from}, to scale; dimensions in inches."
+    alt = (f"Elevation of {element.member}, bolted by {len(joint.pattern)} bolts {_bolt_size(connection)} in {joint.n_lines} gage line"
+           f"{'s' if joint.n_lines > 1 else ''}, length {fraction(joint.length)} in, to a plate {fraction(connection.inputs.plate_thickness)} in thick "
+           f"and {fraction(connection.inputs.plate_width)} in wide.")
+    if check is not None and check.path is not None:
+        what, styles = described(check)
+        verb = "Shaded" if isinstance(check.path, Block) else "Heavy line"
+        governs = ", which governs" if check.id == connection.governing.id else ""
+        caption += f" {verb}: {check.title[0].lower()}{check.title[1:]}, {what} (D/C {ratio_text(check.ratio)}{governs})." + (f" {styles}" if styles else "")
+        alt += f" Marked: {check.title}, {what}, D/C {ratio_text(check.ratio)}."
+    return style.Figure(svg, caption, alt, width)
+
+
+def path_checks(connection):
+    """Return the checks whose paths are drawn, in the order of PATHS."""
+    by_id = {check.id: check for check in connection.checks if check.path is not None and check.ratio is not None}
+    return [max((by_id[id] for id in ids if id in by_id), key=lambda check: check.ratio) for ids in PATHS if any(id in by_id for id in ids)]
+
+
+def paths_canvas(connection):
+    """Return the matplotlib Figure of the small elevations, one axes for each of ``path_checks``."""
+    checks = path_checks(connection)
+    joint = connection.joint
+    traces = [trace(joint, check) for check in checks]
+    views = [view(joint, path) for path in traces]
+    across = max(seen.wide[1] - seen.wide[0] for seen in views)
+    tall = max(seen.top - seen.bottom for seen in views)
+    gap, words, tallest = 0.2, 40, 2.0
+
+    def scale_for(columns):
+        rows = math.ceil(len(checks) / columns)
+        wide = (style.TEXT_WIDTH - gap * (columns - 1)) / columns
+        return min(wide / across, (min(tallest, 5.0 / rows) - words / 72) / tall, 0.3)
+
+    columns = max(range(2, max(3, min(len(checks), 3) + 1)), key=lambda n: (round(scale_for(n), 4), -n))
+    scale = scale_for(columns)
+    rows = math.ceil(len(checks) / columns)
+    cell = (style.TEXT_WIDTH - gap * (columns - 1)) / columns
+    height = tall * scale + (words + 14) / 72
+    figure = style.canvas(style.TEXT_WIDTH, rows * height)
+    for k, (check, path, seen) in enumerate(zip(checks, traces, views)):
+        row, column = divmod(k, columns)
+        in_row = min(columns, len(checks) - row * columns)
+        start = (style.TEXT_WIDTH - in_row * cell - (in_row - 1) * gap) / 2
+        place = (start + column * (cell + gap), (rows - 1 - row) * height, cell, height)
+        pt = 1 / 72 / scale
+        x0, x1 = seen.wide
+        middle = (x0 + x1) / 2
+        paper = Drawing(figure, place, (middle - cell / scale / 2, (seen.bottom + seen.top) / 2 - tall / 2 - words * pt), scale)
+        draw(paper, seen, path, numbers=False)
+        base = (seen.bottom + seen.top) / 2 - tall / 2 - 12 * pt
+        governs = check.id == connection.governing.id
+        colour = style.ACCENT if governs else style.INK
+        paper.text(middle, base, check.title, style.TYPE, "center", weight="bold" if governs else "normal", colour=colour)
+        paper.text(middle, base - 11 * pt, f"D/C {ratio_text(check.ratio)}{', governs' if governs else ''}", style.TYPE, "center", colour=colour)
+    return figure
+
+
+def paths(connection):
+    """Draw the governing path of every limit state that has one, as small elevations to one scale.
+
+    Returns
+    -------
+    figure : style.Figure.
+    """
+    checks = path_checks(connection)
+    with style.house():
+        drawn = paths_canvas(connection)
+        svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
+    listed = "; ".join(f"{check.title[0].lower()}{check.title[1:]}: {described(check)[0]}" for check in checks)
+    caption = ("Governing paths by limit state, all to one scale. Shaded: tear-out blocks, sheared along solid and torn along dashed lines; "
+               "heavy lines: chains of holes and the Whitmore width.")
+    alt = f"{len(checks)} small elevations. " + style.part_line(listed) + "."
+    return style.Figure(svg, caption, alt, width)

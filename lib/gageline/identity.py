@@ -1,0 +1,46 @@
+"""What made a report: versions of the program and of what it stands on, hashes of its code and tables."""
+
+import functools
+import hashlib
+import importlib.metadata
+import platform
+from pathlib import Path
+
+from . import __version__
+from .sheet.assets import templates_root
+
+_STANDS_ON = ("handcalcs", "pint", "numpy", "matplotlib", "nbconvert", "pypandoc_binary", "typst")
+
+
+@functools.cache
+def program_hash():
+    """Return the SHA-256 over the package's code and tables, names included."""
+    return _hash(Path(__file__).parent, ("*.py", "*.csv", "*.toml"))
+
+
+def _hash(root, patterns):
+    digest = hashlib.sha256()
+    for path in sorted(path for pattern in patterns for path in root.rglob(pattern)):
+        digest.update(path.relative_to(root).as_posix().encode() + b"\0" + path.read_bytes() + b"\0")
+    return digest.hexdigest()
+
+
+def file_hash(path):
+    """Return the SHA-256 of a file."""
+    return hashlib.sha256(Path(path).read_bytes()).hexdigest()
+
+
+def rows(family):
+    """Return the (key, value) rows of a report's program identification."""
+    versions = []
+    for name in _STANDS_ON:
+        try:
+            versions.append(f"{name} {importlib.metadata.version(name)}")
+        except importlib.metadata.PackageNotFoundError:
+            versions.append(f"{name} not installed")
+    root = templates_root()
+    return [("Program", f"gageline {__version__}"), ("Code and tables, SHA-256", program_hash()),
+            (f"Shipped template {family}.ipynb, SHA-256", file_hash(root / f"{family}.ipynb")),
+            ("Shipped sheet, SHA-256", file_hash(root / "sheet" / "sheet.typ")),
+            ("Stands on", ", ".join(versions)), ("Python", f"{platform.python_version()} on {platform.system()} {platform.machine()}"),
+            ("Modulus of elasticity", "29 000 ksi")]

@@ -1,0 +1,265 @@
+"""The parts of a report as blocks of the sheet: tables of summary, inputs, loads and bolts, and the checks line by line."""
+
+from . import check, units
+from .connections import bolt_group
+from .editions import REFERENCES
+from .formula import Formula
+from .loads import Demands, permissible as permissible_load
+from .render import value_latex
+from .sheet import blocks as sheet
+from .symbols import SYMBOLS
+
+NEEDS_NO_SOURCE = ("mark", "title", "purpose", "assumptions", "open_items", "U_basis", "gusset_K_basis")
+"""Inputs that are words about the calculation, not facts about the job."""
+
+CAUTIONS = (
+    "Verify every input against the contract documents before relying on this calculation.",
+    "Local codes and the authority having jurisdiction govern where they ask for more.",
+    "A licensed engineer is responsible for the use of this calculation; the program neither signs nor seals.",
+    "Limit states listed as by others are not covered here.",
+)
+
+PARTS = {"member": "Member", "bolts": "Bolts", "plate": "Connection plate", "detailing": "Spacing, edges, clearance"}
+
+
+def ratio(each):
+    """Return a check's D/C as printed."""
+    return units.ratio_text(each.ratio)
+
+
+def _amount(value, unit, rounded):
+    return f"{rounded(value)} {unit}".strip()
+
+
+def required(each):
+    """Return what a check requires, never rounded down."""
+    return _amount(each.demand, each.unit, units.ceil_figures if each.kind == "strength" else lambda v: units.printed(v))
+
+
+def available(each):
+    """Return what is available, never rounded up."""
+    return _amount(each.available, each.unit, units.floor_figures if each.kind == "strength" else lambda v: units.printed(v))
+
+
+def figure(drawn):
+    """Return a drawn figure as a block."""
+    return sheet.figure(svg=drawn.svg, caption=drawn.caption, alt=drawn.alt, width=drawn.width)
+
+
+def cover(calc):
+    """Return the cover block of a calculation."""
+    connection, job = calc.connection, calc.project
+    governs = connection.governing
+    applied = [each.title for each in connection.checks if each.applies]
+    apart = [[each.title, each.reason] for each in connection.checks if not each.applies]
+    verdict = "all checks satisfied" if connection.ok else "N.G.: not every check is satisfied"
+    taken = [[f"A{i}", text, basis, "stated"] for i, (text, basis) in enumerate(connection.assumptions(), start=1)]
+    return sheet.cover(
+        title=connection.inputs.title or connection.title,
+        governing=f"{governs.title} governs: required {required(governs)}, available {available(governs)}, "
+                  f"D/C = {ratio(governs)}; {verdict}.",
+        purpose=connection.inputs.purpose or f"{connection.title} of {connection.element.member}: strength of the member's end and of its "
+                                             "connection, from the gross section to the connection plate.",
+        criteria=[["Specification", REFERENCES[job.edition]], ["Method", job.method], ["Loads", REFERENCES[job.loads]],
+                  ["Materials", connection.materials_text()], ["Units", "kip, inch, ksi"]],
+        scope={"checked": applied, "not_applicable": apart, "by_others": list(connection.by_others())},
+        assumptions=taken, open_items=calc.open_items(), cautions=list(CAUTIONS[:3]),
+        revisions=[[job.rev, job.date.isoformat(), job.revision_text, job.prepared_by, "", ""]])
+
+
+def summary(connection):
+    """Return the summary blocks."""
+    governs = connection.governing
+    rows = []
+    ranked = check.worst_first([each for each in connection.checks if each.kind == "strength"])
+    ranked.remove(governs)
+    for each in (governs, *ranked):
+        title = each.title + (" — governs" if each is governs else "")
+        rows.append({"cells": [title, each.clause, required(each), available(each), ratio(each), "OK" if each.ok else "N.G."],
+                     "strong": each is governs or not each.ok})
+    for each in connection.checks:
+        if each.kind == "strength" and not each.applies:
+            rows.append({"cells": [each.title, each.clause], "span_reason": [2, f"not applicable: {each.reason}"]})
+    columns = [{"head": "Check", "width": 2.75}, {"head": "Clause"}, {"head": "Required", "align": "right"}, {"head": "Available", "align": "right"},
+               {"head": "D/C", "align": "right"}, {"head": ""}]
+    out = [sheet.heading(text="Summary"), sheet.table(columns=columns, rows=rows)]
+    limits = [each for each in connection.checks if each.kind != "strength"]
+    failed = [each for each in limits if each.ok is False]
+    said = "All limits of spacing, edge distance and clearance are met; they are listed in their own section." if not failed else \
+        "Not met: " + "; ".join(f"{each.title} ({required(each)} against {available(each)})" for each in failed) + "."
+    return [*out, sheet.prose(runs=said)]
+
+
+def inputs(calc):
+    """Return the inputs as executed: given ones with their source, defaults marked so."""
+    rows, group = [], None
+    for heading, name, meaning, value, given in calc.connection.inputs.shown():
+        if name in ("title", "purpose", "assumptions", "open_items") or (not given and value in ("not given", "none", "")):
+            continue
+        if heading != group:
+            rows.append({"cells": [], "span_reason": [0, [{"strong": heading}]]})
+            group = heading
+        typed = calc.given[name].value if given else ""
+        if isinstance(typed, str) and any(unit in typed for unit in ("mm", "cm", "kN", "MPa", " m")) and "in" in value + "kip ksi":
+            value = f"{typed} = {value}"
+        source = calc.sources.get(name) or ("" if name in NEEDS_NO_SOURCE else "no source given")
+        rows.append({"cells": [name, meaning, value, source if given else "default"]})
+    columns = [{"head": "Input", "width": 1.35}, {"head": "Meaning", "width": 2.1}, {"head": "Value", "width": 1.45}, {"head": "Source"}]
+    return [sheet.heading(text="Inputs"), sheet.table(columns=columns, rows=rows)]
+
+
+def loads(connection):
+    """Return the loads: all combinations with numbers, or the given demand."""
+    demand, basis = connection.demand, connection.basis
+    sign = "P_u" if basis.method == "LRFD" else "P_a"
+    out = [sheet.heading(text="Loads and required strength")]
+    if isinstance(demand, Demands):
+        rows = []
+        for row in demand.rows:
+            governs = row is demand.tension or row is demand.compression
+            numbers = " ".join(f"{'−' if value < 0 else '+' if i else ''} {units.printed(abs(value))}".strip()
+                               for i, value in enumerate(row.terms.values()))
+            total = units.printed(row.total)
+            rows.append({"cells": [row.combination.clause, row.combination.text, numbers, total.replace("-", "−")], "strong": governs})
+        columns = [{"head": "Clause"}, {"head": "Combination"}, {"head": "With numbers, kip"}, {"head": "Total, kip", "align": "right"}]
+        out.append(sheet.table(columns=columns, rows=rows, caption=f"Combinations of {basis.loads_standard}, {basis.method}; tension positive, "
+                                                                   "the governing ones in bold."))
+    else:
+        out.append(sheet.prose(runs=f"The required strength is given at {demand.level} level."))
+    out.append(sheet.prose(runs=[
+        "Required tension ", {"math": f"{sign} = {value_latex(units.ceil_figures(demand.required_tension, 4), 'kip')}", "alt": "required tension"},
+        *([f"; required compression {units.ceil_figures(demand.required_compression, 4)} kip"] if demand.required_compression > 0 else
+          ["; no combination gives compression" if isinstance(demand, Demands) else "; no compression is given"]), "."]))
+    return out
+
+
+def designed(connection):
+    """Return what is to be built, for comparison with the drawings."""
+    return sheet.pairs(rows=[[key, value, ""] for key, value in connection.designed()])
+
+
+def steps(done, edition):
+    """Return remembered steps as blocks: remarks as prose, each formula call as an equation with its clause."""
+    out = []
+    for step in done:
+        if isinstance(step, str):
+            out.append(sheet.prose(runs=step))
+            continue
+        formula, values = step
+        lines = [line.rendered() for line in formula.lines(*values, edition=edition)]
+        out.append(sheet.equation(lines=[{"lhs": line.sign, "rows": [row for row in (line.symbolic, line.numeric, line.result) if row]}
+                                         for line in lines],
+                                  alt=" ".join(line.reading for line in lines), clause=formula.clause[edition]))
+    return out
+
+
+def checks(connection, part):
+    """Return the checks of one part, every line written out; detailing as one table."""
+    if part == "detailing":
+        return _detailing(connection)
+    out = [sheet.heading(text=PARTS[part])]
+    apart = []
+    for each in connection.checks:
+        if each.part != part or each.kind != "strength":
+            continue
+        if not each.applies:
+            apart.append([each.title, each.reason, each.clause])
+            continue
+        out.append(sheet.heading(text=each.title.partition(", ")[2].capitalize() if each.part != "bolts" else each.title, level=2))
+        out += steps(each.steps, connection.basis.edition)
+        sign = r"\phi " if connection.basis.method == "LRFD" else ""
+        nominal = "P_n" if each.axial else "R_n"
+        strength = f"{sign}{nominal}" if sign else rf"{nominal}/\Omega"
+        lhs = [{"math": f"{strength} = {value_latex(units.floor_figures(each.available), 'kip')}", "alt": f"available strength {available(each)}"}]
+        out.append(sheet.verdict(lhs=lhs, text=f"{units.ceil_figures(each.demand)} / {units.floor_figures(each.available)}",
+                                 ratio_text=ratio(each), ok=each.ok))
+        out += [sheet.note(runs=remark) for remark in each.notes]
+    if apart:
+        out += [sheet.heading(text="Not applicable", level=2), sheet.pairs(rows=apart)]
+    return out
+
+
+def _detailing(connection):
+    rows = []
+    for each in connection.checks:
+        if each.kind == "strength":
+            continue
+        if not each.applies:
+            rows.append({"cells": [each.title, each.clause], "span_reason": [2, f"not applicable: {each.reason}"]})
+            continue
+        limit = [step for step in each.steps if not isinstance(step, str)]
+        shown = ""
+        if limit:
+            formula, values = limit[-1]
+            line = formula.lines(*values)[-1].rendered()
+            shown = [{"math": f"{line.sign} = {line.symbolic} = {line.result}" if line.symbolic else f"{line.sign} = {line.result}",
+                      "alt": line.reading}]
+        verdict = "OK" if each.ok else ("see note" if each.kind == "advice" else "N.G.")
+        rows.append({"cells": [each.title, each.clause, shown, required(each), available(each), ratio(each), verdict],
+                     "strong": not each.ok})
+    columns = [{"head": "Check", "width": 1.75}, {"head": "Clause", "width": 0.95}, {"head": "Limit", "width": 1.75}, {"head": "Demand", "align": "right"},
+               {"head": "Limit or provided", "align": "right", "width": 0.8}, {"head": "D/C", "align": "right"}, {"head": ""}]
+    remarks = dict.fromkeys(remark for each in connection.checks if each.kind != "strength" for remark in each.notes)
+    return [sheet.heading(text=PARTS["detailing"]), sheet.table(columns=columns, rows=rows),
+            *(sheet.note(runs=remark) for remark in remarks)]
+
+
+def bolt_table(connection):
+    """Return the table of every bolt of one group, nominal strengths."""
+    found = bolt_group.bolt_table(connection.joint)
+    fmt = lambda value: units.printed(value, 3)
+    rows = []
+    for row in found["rows"]:
+        (m_l, m_k, m_b, m_t), (p_l, p_k, p_b, p_t) = row["member"], row["plate"]
+        rows.append({"cells": [str(row["bolt"]), units.fraction(row["x"]), units.fraction(row["y"]), f"{fmt(m_l)} {m_k[0]}", fmt(m_b), fmt(m_t),
+                               f"{fmt(p_l)} {p_k[0]}", fmt(p_b), fmt(p_t), fmt(row["shear"]), units.floor_figures(row["least"])]})
+    heads = ["Bolt", "x, in", "y, in", "member lc, in", "bearing", "tearout", "plate lc, in", "bearing", "tearout", "shear", "least"]
+    columns = [{"head": head, "align": "right"} for head in heads]
+    joints = connection.element.joints
+    sums = found["sums"]
+    return [sheet.heading(text="Every bolt"),
+            sheet.table(columns=columns, rows=rows,
+                        caption="Nominal strengths in kip for one bolt group" + (f" of {joints}" if joints > 1 else "") +
+                                "; e: towards the edge of the part, h: towards the next hole."),
+            sheet.prose(runs=f"Sums over {'all groups' if joints > 1 else 'the group'}, nominal: with the member's holes "
+                             f"{units.floor_figures(sums['member'], 4)} kip, with the plate's holes {units.floor_figures(sums['plate'], 4)} kip; "
+                             f"each bolt limited by the weaker ply {units.floor_figures(sums['stricter'], 4)} kip (a stricter reading, for information).")]
+
+
+def permissible(connection):
+    """Return the table of the largest value of each service load with the others fixed."""
+    inputs, basis = connection.inputs, connection.basis
+    service, capacity = inputs.service(), connection.capacity
+    rows = []
+    for nature, value in service.items():
+        if value < 0:
+            continue
+        found = permissible_load(capacity, service, nature, basis.method, basis.loads, **inputs.load_options())
+        limit = found.combination.text if found.combination else ""
+        largest = f"{units.floor_figures(found.value)} kip" if found.value is not None else "none"
+        rows.append({"cells": [nature, f"{units.printed(value)} kip", largest, limit if found.value is not None else found.reason]})
+    columns = [{"head": "Load"}, {"head": "As given", "align": "right"}, {"head": "Permissible", "align": "right"}, {"head": "Limited by"}]
+    return [sheet.heading(text="Permissible loads"),
+            sheet.prose(runs=f"The connection permits a required tension of {units.floor_figures(capacity)} kip ({basis.method}). "
+                             "Largest value of each load with the others as given:"),
+            sheet.table(columns=columns, rows=rows)]
+
+
+def used_symbols(connection):
+    """Return the symbols that the report's lines use, in the table's order."""
+    used = set()
+    for each in connection.checks:
+        for step in each.steps:
+            if isinstance(step, tuple) and isinstance(step[0], Formula):
+                used |= set(step[0].arguments) | {line.symbol for line in step[0].body}
+    return [symbol for name, symbol in SYMBOLS.items() if name in used]
+
+
+def closing(connection):
+    """Return notation, references and cautions."""
+    basis = connection.basis
+    rows = [{"latex": symbol.latex, "alt": symbol.spoken, "meaning": symbol.meaning, "unit": symbol.unit or "–"} for symbol in used_symbols(connection)]
+    works = [[basis.specification, REFERENCES[basis.edition]], [basis.loads_standard, REFERENCES[basis.loads]],
+             ["RCSC", REFERENCES[f"RCSC {basis.edition}"]]]
+    return [sheet.heading(text="Notation"), sheet.notation(rows=rows), sheet.heading(text="References"), sheet.references(rows=works),
+            sheet.heading(text="Cautions"), sheet.cautions(rows=list(CAUTIONS))]

@@ -1,0 +1,398 @@
+"""Connecting elements: block shear, Whitmore width, gusset buckling.  [AISC360] J4.1, J4.3, J4.4, E3."""
+
+from ..formula import formula
+
+
+@formula("J4.3")
+def first_shear_planes(n_v, L_v, t):
+    """Gross area of like shear planes of a tear-out block.
+
+    Parameters
+    ----------
+    n_v : number of like planes. []
+    L_v : gross length of one. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_gv : gross area subject to shear. [in²]
+
+    >>> first_shear_planes.bare(2, 10.5, 0.5)
+    10.5
+    """
+    A_gv = n_v * L_v * t
+    return A_gv
+
+
+@formula("J4.3")
+def more_shear_planes(A_gv0, n_v, L_v, t):
+    """Gross area of like shear planes, added to that of the planes before.
+
+    Parameters
+    ----------
+    A_gv0 : gross shear area of the planes before. [in²]
+    n_v : number of like planes. []
+    L_v : gross length of one. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_gv : gross area subject to shear so far. [in²]
+
+    >>> more_shear_planes.bare(5.0, 1, 10.0, 0.5)
+    10.0
+    """
+    A_gv = A_gv0 + n_v * L_v * t
+    return A_gv
+
+
+@formula("J4.3, B4.3b")
+def first_shear_plane_holes(n_h, d_n, t):
+    """Area lost to holes along like shear planes.
+
+    Parameters
+    ----------
+    n_h : number of holes, the hole at the block's corner as one half. []
+    d_n : width deducted for one. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_hv : area lost along the shear planes. [in²]
+
+    >>> first_shear_plane_holes.bare(7, 1.0, 0.5)
+    3.5
+    """
+    A_hv = n_h * d_n * t
+    return A_hv
+
+
+@formula("J4.3, B4.3b")
+def more_shear_plane_holes(A_hv0, n_h, d_n, t):
+    """Area lost to holes along like shear planes, added to that of the planes before.
+
+    Parameters
+    ----------
+    A_hv0 : area lost along the planes before. [in²]
+    n_h : number of holes, the hole at the block's corner as one half. []
+    d_n : width deducted for one. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_hv : area lost along the shear planes so far. [in²]
+
+    >>> more_shear_plane_holes.bare(3.5, 1, 1.0, 0.5)
+    4.0
+    """
+    A_hv = A_hv0 + n_h * d_n * t
+    return A_hv
+
+
+@formula("J4.3, B4.3b")
+def net_shear_area(A_gv, A_hv):
+    """Net area of a block subject to shear.
+
+    Parameters
+    ----------
+    A_gv : gross area subject to shear. [in²]
+    A_hv : area lost to holes along the shear planes. [in²]
+
+    Returns
+    -------
+    A_nv : net area subject to shear. [in²]
+
+    >>> net_shear_area.bare(10.5, 3.5)
+    7.0
+    """
+    A_nv = A_gv - A_hv
+    return A_nv
+
+
+@formula("J4.3, B4.3b")
+def tension_plane_holes(n_h, d_n, t):
+    """Area lost to holes across the tension plane of a block.
+
+    Parameters
+    ----------
+    n_h : number of holes, a hole at the block's corner as one half. []
+    d_n : width deducted for one. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_ht : area lost across the tension plane. [in²]
+
+    >>> tension_plane_holes.bare(1, 1.0, 0.5)
+    0.5
+    """
+    A_ht = n_h * d_n * t
+    return A_ht
+
+
+@formula("J4.3, B4.3b")
+def net_tension_area(A_gt, A_ht):
+    """Net area of a block subject to tension.
+
+    Parameters
+    ----------
+    A_gt : gross area subject to tension. [in²]
+    A_ht : area lost to holes across the tension plane. [in²]
+
+    Returns
+    -------
+    A_nt : net area subject to tension. [in²]
+
+    >>> net_tension_area.bare(1.5, 0.5)
+    1.0
+    """
+    A_nt = A_gt - A_ht
+    return A_nt
+
+
+@formula("Eq. J4-5")
+def block_shear(F_u, A_nv, U_bs, A_nt, F_y, A_gv):
+    """Nominal strength of a block that shears along one or more planes and ruptures in tension across another.
+
+    Parameters
+    ----------
+    F_u : specified minimum tensile strength. [ksi]
+    A_nv : net area subject to shear. [in²]
+    U_bs : 1.0 where the tension is uniform. []
+    A_nt : net area subject to tension. [in²]
+    F_y : specified minimum yield stress. [ksi]
+    A_gv : gross area subject to shear. [in²]
+
+    Returns
+    -------
+    R_n : nominal strength. [kip]
+
+    >>> round(block_shear.bare(58.0, 1.875, 1.0, 0.375, 36.0, 2.8125), 2)
+    82.5
+    """
+    R_nu = 0.60 * F_u * A_nv + U_bs * F_u * A_nt
+    R_ny = 0.60 * F_y * A_gv + U_bs * F_u * A_nt
+    R_n = min(R_nu, R_ny)
+    return R_n
+
+
+@formula("common practice, Whitmore")
+def whitmore_width(l, theta, g):
+    """Width over which a plate is stressed at its last row of fasteners.
+
+    Parameters
+    ----------
+    l : first to last row. [in]
+    theta : angle of spread each side, 30 degrees. [rad]
+    g : outer gage lines apart. [in]
+
+    Returns
+    -------
+    L_w : Whitmore width, edges not regarded. [in]
+
+    >>> round(whitmore_width.bare(9.0, 0.5235987755982988, 3.0), 2)
+    13.39
+    """
+    L_w = 2 * l * tan(theta) + g
+    return L_w
+
+
+@formula("common practice, Whitmore")
+def width_within_edges(L_w, c_1, c_2):
+    """Width of the plate that counts: the Whitmore width cut off at the plate's edges.
+
+    Parameters
+    ----------
+    L_w : Whitmore width, edges not regarded. [in]
+    c_1 : cut off at one edge. [in]
+    c_2 : cut off at the other edge. [in]
+
+    Returns
+    -------
+    w : width that counts. [in]
+
+    >>> width_within_edges.bare(13.0, 0.5, 0.5)
+    12.0
+    """
+    w = L_w - c_1 - c_2
+    return w
+
+
+@formula("geometry")
+def plate_area(w, t):
+    """Gross area of a plate's width.
+
+    Parameters
+    ----------
+    w : width. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_g : gross area. [in²]
+
+    >>> plate_area.bare(12.0, 0.5)
+    6.0
+    """
+    A_g = w * t
+    return A_g
+
+
+@formula("geometry")
+def like_plates_area(n_j, w, t):
+    """Gross area of a width of like plates.
+
+    Parameters
+    ----------
+    n_j : number of plates. []
+    w : width. [in]
+    t : thickness of one. [in]
+
+    Returns
+    -------
+    A_g : gross area. [in²]
+
+    >>> like_plates_area.bare(2, 12.0, 0.5)
+    12.0
+    """
+    A_g = n_j * w * t
+    return A_g
+
+
+@formula("geometry")
+def plate_radius(t):
+    """Radius of gyration of a plate bending about its own plane.
+
+    Parameters
+    ----------
+    t : thickness. [in]
+
+    Returns
+    -------
+    r : radius of gyration. [in]
+
+    >>> round(plate_radius.bare(0.5), 4)
+    0.1443
+    """
+    r = t / sqrt(12)
+    return r
+
+
+@formula("E2")
+def effective_slenderness(K, L_b, r):
+    """Effective slenderness ratio of a gusset's strip.
+
+    Parameters
+    ----------
+    K : effective length factor. []
+    L_b : length considered. [in]
+    r : radius of gyration. [in]
+
+    Returns
+    -------
+    lam : effective slenderness ratio. []
+
+    >>> effective_slenderness.bare(0.5, 10.0, 0.2)
+    25.0
+    """
+    lam = K * L_b / r
+    return lam
+
+
+@formula("Eq. E3-4")
+def elastic_buckling_stress(E, lam):
+    """Elastic buckling stress.
+
+    Parameters
+    ----------
+    E : modulus of elasticity. [ksi]
+    lam : effective slenderness ratio. []
+
+    Returns
+    -------
+    F_e : elastic buckling stress. [ksi]
+
+    >>> round(elastic_buckling_stress.bare(29000.0, 100.0), 2)
+    28.62
+    """
+    F_e = pi**2 * E / lam**2
+    return F_e
+
+
+@formula("Eq. E3-2")
+def inelastic_buckling(F_y, F_e):
+    """Critical stress where yielding takes part in buckling.
+
+    Parameters
+    ----------
+    F_y : specified minimum yield stress. [ksi]
+    F_e : elastic buckling stress. [ksi]
+
+    Returns
+    -------
+    F_cr : critical stress. [ksi]
+
+    >>> round(inelastic_buckling.bare(50.0, 50.0), 1)
+    32.9
+    """
+    F_cr = 0.658**(F_y / F_e) * F_y
+    return F_cr
+
+
+@formula("Eq. E3-3")
+def elastic_buckling(F_e):
+    """Critical stress where buckling is elastic.
+
+    Parameters
+    ----------
+    F_e : elastic buckling stress. [ksi]
+
+    Returns
+    -------
+    F_cr : critical stress. [ksi]
+
+    >>> elastic_buckling.bare(10.0)
+    8.77
+    """
+    F_cr = 0.877 * F_e
+    return F_cr
+
+
+@formula("Eq. J4-6")
+def gusset_yielding_in_compression(F_y, A_g):
+    """Nominal compressive strength of a gusset's strip with effective slenderness not above 25.
+
+    Parameters
+    ----------
+    F_y : specified minimum yield stress. [ksi]
+    A_g : gross area of the strip. [in²]
+
+    Returns
+    -------
+    P_n : nominal strength. [kip]
+
+    >>> gusset_yielding_in_compression.bare(50.0, 6.0)
+    300.0
+    """
+    P_n = F_y * A_g
+    return P_n
+
+
+@formula("Eq. E3-1")
+def gusset_buckling(F_cr, A_g):
+    """Nominal compressive strength of a gusset's strip that buckles.
+
+    Parameters
+    ----------
+    F_cr : critical stress. [ksi]
+    A_g : gross area of the strip. [in²]
+
+    Returns
+    -------
+    P_n : nominal strength. [kip]
+
+    >>> gusset_buckling.bare(40.0, 6.0)
+    240.0
+    """
+    P_n = F_cr * A_g
+    return P_n

@@ -1,0 +1,200 @@
+"""The one unit registry, reading of dimensions as the trade writes them, and how numbers are printed.
+
+Inside the package every number is a plain float in kip, inch and ksi; units are read here and printed from here.
+"""
+
+import functools
+import math
+import re
+from fractions import Fraction
+
+from .errors import InputError
+
+# A registry of our own: pint's stock names (kip_per_square_inch) print as nested subscripts, and it loads 30 times slower.
+_DEFINITIONS = """
+inch = [length] = in = inches
+foot = 12 * inch = ft = feet
+mm = inch / 25.4 = _ = millimeter
+cm = 10 * mm = _ = centimeter
+m = 1000 * mm = _ = meter
+kip = [force] = _ = kips
+lbf = kip / 1000 = _ = lb = lbs
+kN = kip / 4.4482216152605 = _ = kilonewton
+N = kN / 1000 = _ = newton
+ksi = kip / inch ** 2
+psi = ksi / 1000
+MPa = N / mm ** 2 = _ = megapascal
+radian = [] = rad
+degree = 0.017453292519943295 * radian = deg
+"""
+
+DISPLAY = {"in": "inch", "in²": "inch**2", "in³": "inch**3", "kip": "kip", "ksi": "ksi", "kip/in": "kip/inch", "rad": "radian",
+           "kip·in": "kip*inch", "1/in": "1/inch", "": "dimensionless"}
+"""Display unit as printed -> the registry's expression for it."""
+
+_KIND = {"in": "a length, for example 3/4 in or 19 mm", "kip": "a force, for example 31 kip or 140 kN",
+         "ksi": "a stress, for example 50 ksi or 345 MPa", "in²": "an area, for example 3.75 in^2",
+         "rad": "an angle, for example 30 deg", "": "a number without unit"}
+
+_VULGAR = {"¼": "1/4", "½": "1/2", "¾": "3/4", "⅛": "1/8", "⅜": "3/8", "⅝": "5/8", "⅞": "7/8"}
+_NUMBER = r"(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][-+]?\d+)?"
+_AMOUNT = re.compile(rf"(?P<sign>[-+]?)\s*(?:(?P<whole>\d+)[\s-]+(?P<num>\d+)\s*/\s*(?P<den>\d+)"
+                     rf"|(?P<num2>\d+)\s*/\s*(?P<den2>\d+)|(?P<dec>{_NUMBER}))")
+
+
+@functools.cache
+def registry():
+    """Return the package's pint registry, made once and set as the application registry."""
+    import pint
+
+    ureg = pint.UnitRegistry(None, on_redefinition="raise")
+    ureg.load_definitions(_DEFINITIONS.strip().splitlines())
+    ureg.formatter.default_format = "~P"
+    ureg.formatter.default_sort_func = None
+    pint.set_application_registry(ureg)
+    return ureg
+
+
+def quantity(value, unit):
+    """Return value as a pint quantity in a display unit ("in", "in²", "kip", "ksi", …)."""
+    ureg = registry()
+    return ureg.Quantity(value, DISPLAY[unit])
+
+
+def _amount(text, where):
+    match = _AMOUNT.match(text)
+    if not match:
+        raise InputError(f"{where}: cannot read a number in {text!r}; write for example 3/4 in, 1-1/2 in, 10'-6 1/2\" or 31 kip")
+    part = match.groupdict()
+    try:
+        if part["dec"] is not None:
+            value = float(part["dec"])
+        elif part["num2"] is not None:
+            value = float(Fraction(int(part["num2"]), int(part["den2"])))
+        else:
+            value = float(int(part["whole"]) + Fraction(int(part["num"]), int(part["den"])))
+    except ZeroDivisionError:
+        raise InputError(f"{where}: {text!r} divides by zero") from None
+    return (-value if part["sign"] == "-" else value), text[match.end():].strip()
+
+
+def read(text, unit, where="quantity"):
+    """Read a dimensioned text and return it as a float in a display unit.
+
+    Parameters
+    ----------
+    text : for example ``"3/4 in"``, ``"1-1/8 in"``, ``"10'-6 1/2\\""``, ``"19 mm"``, ``"31 kip"``, ``"30 deg"``.
+    unit : display unit wanted, a key of ``DISPLAY``; ``""`` for a number without unit.
+    where : name of the input, for the error sentence.
+
+    Raises
+    ------
+    InputError
+        Text without a unit, of another dimension, not a finite number, or not readable.
+
+    >>> read("10'-6 1/2\\"", "in")
+    126.5
+    """
+    wanted = _KIND.get(unit, f"a quantity in {unit}")
+    if isinstance(text, bool) or not isinstance(text, (str, int, float)):
+        raise InputError(f"{where}: {text!r} is not {wanted}")
+    if not isinstance(text, str):
+        if unit == "" and math.isfinite(text):
+            return float(text)
+        raise InputError(f"{where} = {text!r} has no unit; give {wanted}, as text in quotes" if unit else
+                         f"{where} = {text!r} is not a finite number")
+    raw = text
+    text = text.strip().replace("−", "-").replace("–", "-").replace("″", '"').replace("′", "'").replace("”", '"').replace("’", "'")
+    for sign, plain in _VULGAR.items():
+        text = re.sub(rf"(\d)\s*{sign}", rf"\1 {plain}", text).replace(sign, plain)
+    value, rest = _amount(text, where)
+    if rest.startswith("'"):
+        inches = rest[1:].strip().lstrip("-").strip()
+        feet, sign = value, -1.0 if text.startswith("-") else 1.0
+        extra, tail = _amount(inches, where) if inches else (0.0, '"')
+        if tail not in ('"', "in"):
+            raise InputError(f"{where}: cannot read {raw!r}; write feet and inches as 10'-6 1/2\"")
+        value, rest = feet * 12.0 + sign * extra, "in"
+    rest = {'"': "in"}.get(rest, rest).replace("²", "**2").replace("³", "**3").replace("^", "**").replace("·", "*")
+    if not math.isfinite(value):
+        raise InputError(f"{where} = {raw!r} is not a finite number")
+    if unit == "" and not rest:
+        return value
+    if not rest:
+        raise InputError(f"{where} = {raw!r} has no unit; give {wanted}")
+    ureg = registry()
+    import pint
+
+    try:
+        return float(ureg.Quantity(value, rest).to(DISPLAY[unit]).magnitude)
+    except pint.DimensionalityError:
+        raise InputError(f"{where} = {raw!r} has the wrong dimension; give {wanted}") from None
+    except Exception:
+        known = "in, ft, mm, cm, m, kip, lbf, kN, N, ksi, psi, MPa, deg, rad"
+        raise InputError(f"{where} = {raw!r}: unit {rest!r} is not known; known are {known}") from None
+
+
+def fraction(value, denominator=16, unit=""):
+    """Return inches as the trade writes them ("1½", "5/16", "10-3/16"), or as a decimal where no such fraction fits.
+
+    >>> fraction(1.5), fraction(0.3125), fraction(0.3)
+    ('1½', '5/16', '0.3')
+    """
+    whole, part = divmod(abs(value) * denominator, denominator)
+    if abs(part - round(part)) > 1e-6 * denominator:
+        return ("−" if value < 0 else "") + f"{abs(value):.4g}" + unit
+    frac = Fraction(round(part), denominator)
+    whole, frac = (int(whole) + 1, Fraction(0)) if frac == 1 else (int(whole), frac)
+    glyph = {plain: sign for sign, plain in _VULGAR.items()}.get(str(frac))
+    text = str(whole) if frac == 0 else (f"{whole or ''}{glyph}" if glyph else f"{whole}-{frac}" if whole else str(frac))
+    return ("−" if value < 0 else "") + text + unit
+
+
+def printed(value, digits=4, places=0):
+    """Return a number for print: exact short decimals as they are, others to ``digits`` significant figures.
+
+    ``places`` is the least number of decimals kept on a short decimal, so that 3 prints as 3.00 where that is the custom.
+
+    >>> printed(0.8125), printed(2.87822), printed(65.0), printed(3.0, places=2), printed(12345.6)
+    ('0.8125', '2.878', '65', '3.00', '12346')
+    """
+    if value == 0:
+        return f"{0.0:.{places}f}"
+    size = math.floor(math.log10(abs(value)))
+    shortest = next((n for n in range(places, 5) if abs(value - round(value, n)) <= 1e-12 * abs(value)), None)
+    if shortest is not None and size + 1 + shortest <= max(digits, 5):
+        return f"{value:.{shortest}f}"
+    return f"{value:.{max(0, digits - 1 - size)}f}"
+
+
+def floor_figures(value, figures=3):
+    """Round towards zero to significant figures: an available strength is never rounded up."""
+    return _figures(value, figures, math.floor)
+
+
+def ceil_figures(value, figures=3):
+    """Round away from zero to significant figures: a demand is never rounded down."""
+    return _figures(value, figures, math.ceil)
+
+
+def _figures(value, figures, towards):
+    if value == 0 or not math.isfinite(value):
+        return f"{value:.0f}"
+    size = math.floor(math.log10(abs(value)))
+    places = max(0, figures - 1 - size)
+    scale = 10.0**places
+    # 1e-9: a product that is 140.31000000000003 in binary is 140.31
+    nudge = 1e-9 if towards is math.floor else -1e-9
+    number = math.copysign(towards(abs(value) * scale * (1 + nudge)) / scale, value)
+    return f"{number:.{places}f}"
+
+
+def ratio_text(ratio):
+    """Return D/C to three decimals, never rounded past 1.00 and never below a value that is over it.
+
+    >>> ratio_text(0.9124), ratio_text(1.0002), ratio_text(0.99999)
+    ('0.912', '1.001', '1.000')
+    """
+    if ratio > 1.0 + 1e-9:
+        return f"{math.ceil(ratio * 1000 - 1e-6) / 1000:.3f}"
+    return f"{ratio:.3f}"
