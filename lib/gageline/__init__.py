@@ -14,15 +14,32 @@ def begin(family):
     return begin(family)
 
 
-def bolted(*, edition="360-22", method="LRFD", loads="7-22", **inputs):
-    """Return a bolted tension connection built from keyword inputs; see ``connections.bolted``.
+def build(family, *, edition="360-22", method="LRFD", loads="7-22", **inputs):
+    """Return a connection built from keyword inputs, quantities as texts with units; no notebook is needed.
 
-    >>> tie = bolted(mark="T1", member="PL 1/2 x 6", member_grade="A572-50", plate_thickness="1/2 in", plate_width="6 in",
-    ...              plate_grade="A572-50", plate_end="1-1/2 in", lines=2, rows=3, pitch="3 in", gage="3 in", member_end="1-1/2 in",
-    ...              bolt="7/8 in", bolt_grade="A325", tension="90 kip", demand_level="LRFD")
+    Raises
+    ------
+    GagelineError
+        Whatever is wrong with the inputs, as one sentence.
+
+    >>> tie = build("bolted", mark="T1", member="PL 1/2 x 6", member_grade="A572-50",
+    ...             plate_thickness="1/2 in", plate_width="6 in",
+    ...             plate_grade="A572-50", plate_end="1-1/2 in", lines=2, rows=3, pitch="3 in", gage="3 in", member_end="1-1/2 in",
+    ...             bolt="7/8 in", bolt_grade="A325", tension="90 kip", demand_level="LRFD")
     >>> round(tie.capacity, 1), tie.governing.id
     (97.5, 'member rupture')
     """
-    from .connections.bolted import BoltedConnection
+    from .families import family as named
 
-    return BoltedConnection.of(edition=edition, method=method, loads=loads, **inputs)
+    return named(family).of(edition=edition, method=method, loads=loads, **inputs)
+
+
+def __getattr__(name):
+    """Give every family as a function of its own: ``gageline.bolted(...)`` is ``gageline.build("bolted", ...)``."""
+    from functools import partial
+    from importlib import import_module
+
+    # "from . import families" would ask this function for the module first.
+    if name.startswith("_") or name == "families" or name not in import_module(".families", __name__).names():
+        raise AttributeError(f"module 'gageline' has no attribute {name!r}")
+    return partial(build, name)

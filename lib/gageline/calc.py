@@ -6,7 +6,7 @@ Each part is an object the notebook displays: blocks for the sheet (``sheet.bloc
 import html
 import json
 
-from . import cells, families, figures, identity, presenting, project, study
+from . import cells, families, identity, presenting, project, study
 from .errors import InputError
 from .loads import Demands
 from .sheet import blocks as sheet
@@ -120,33 +120,37 @@ class Calc:
         return Part(presenting.loads(self.connection))
 
     def drawing(self):
-        """Return the connection as designed: elevation with the governing path, cross-section, what is to be built."""
-        found = [figures.elevation(self.connection), figures.cross_section(self.connection), figures.paths(self.connection)]
+        """Return the connection as designed: what is to be built, elevation with the governing path, cross-section."""
         return Part([sheet.heading(text="Connection as designed"), presenting.designed(self.connection),
-                     *(presenting.figure(each) for each in found if each is not None)])
+                     *(presenting.figure(each) for each in self.connection.drawings())])
 
     def checks(self, part):
-        """Return the checks of one part of the load path ("member", "bolts", "plate", "detailing"), every line written out."""
-        return Part(presenting.checks(self.connection, part))
+        """Return the checks of one part of the load path, every line written out, with the tables that belong to it.
 
-    def bolt_table(self):
-        """Return the table of every bolt: clear distances, bearing, tearout, shear, the least of them."""
-        return Part(presenting.bolt_table(self.connection))
+        Parameters
+        ----------
+        part : one of the connection's ``parts``, for example "member" or "detailing".
+        """
+        return Part(presenting.checks(self.connection, part))
 
     def curve(self):
         """Return the strength of each limit state against the connection's length, and the shortest length in words."""
         found = study.capacity_curve(self.connection)
         head = sheet.heading(text="Capacity against connection length")
-        if found is None:
-            return Part([head, sheet.prose(runs="Not drawn: the holes are given one by one, so there is no pitch at which rows could be added.")])
-        return Part([head, sheet.prose(runs=found.sentence), presenting.figure(figures.capacity_curve(self.connection, found))])
+        if isinstance(found, str):
+            return Part([head, sheet.prose(runs=found)])
+        from .figures import capacity_curve
+
+        return Part([head, sheet.prose(runs=found.sentence), presenting.figure(capacity_curve(self.connection, found))])
 
     def permissible(self):
         """Return the largest value of each service load with the others as they are, and the plot of permissible D against L."""
         if not isinstance(self.connection.demand, Demands):
             return Part([sheet.heading(text="Permissible loads"), sheet.prose(
                 runs="Not worked out: the demand is given as a required strength, not as service loads.")])
-        drawn = figures.permissible_loads(self.connection)
+        from .figures import permissible_loads
+
+        drawn = permissible_loads(self.connection)
         return Part([*presenting.permissible(self.connection), *([presenting.figure(drawn)] if drawn else [])])
 
     def closing(self):

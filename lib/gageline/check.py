@@ -76,7 +76,8 @@ class Check:
 
     ``kind`` is "strength", "detailing" (required against provided, in inches) or "advice" (never fails a calculation).
     A check that does not apply has ``reason`` and no numbers. ``path`` is what a figure shades: a chain, a block or None.
-    ``tension`` is False for a check against compression, ``axial`` says that the nominal strength is called P_n.
+    ``tension`` is False for a check against compression, ``axial`` says that the nominal strength is
+    called P_n, ``at_most`` that a detailing limit is an upper one.
     """
 
     id: str
@@ -95,6 +96,7 @@ class Check:
     path: object = None
     tension: bool = True
     axial: bool = False
+    at_most: bool = False
 
     @property
     def applies(self):

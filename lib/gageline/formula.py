@@ -26,7 +26,7 @@ _NODES = (ast.Expression, ast.BinOp, ast.UnaryOp, ast.Name, ast.Constant, ast.Ca
 
 
 def _array(values):
-    return any(hasattr(value, "shape") and getattr(value, "shape") for value in values)
+    return any(getattr(value, "shape", ()) for value in values)
 
 
 def _least(*values):
@@ -62,9 +62,10 @@ _NAMESPACE = {"min": _least, "max": _greatest, "sqrt": _root, "tan": _tangent, "
 
 @dataclass(frozen=True)
 class BodyLine:
-    """One ``symbol = expression`` line: its target, parsed expression and the names it uses, in order of appearance."""
+    """One ``symbol = expression`` line: its target, the expression as written and parsed, and the names it uses, in order of appearance."""
 
     symbol: str
+    source: str
     expression: ast.expr
     names: tuple
     code: object
@@ -97,7 +98,8 @@ class Formula:
     def __init__(self, function, clause):
         functools.update_wrapper(self, function)
         self.clause = dict.fromkeys(EDITIONS, clause) if isinstance(clause, str) else dict(clause)
-        tree = ast.parse(textwrap.dedent(inspect.getsource(function))).body[0]
+        self._source = textwrap.dedent(inspect.getsource(function))
+        tree = ast.parse(self._source).body[0]
         self.arguments = tuple(argument.arg for argument in tree.args.args)
         self.where = f"{function.__module__}.{function.__name__}"
         self.body = tuple(self._read(tree))
@@ -132,7 +134,7 @@ class Formula:
                 self._refuse(node, f"{', '.join(unknown)} is used before it is known")
             known.add(symbol)
             code = compile(ast.fix_missing_locations(ast.Expression(node.value)), self.where, "eval")
-            yield BodyLine(symbol, node.value, names, code)
+            yield BodyLine(symbol, ast.get_source_segment(self._source, node.value), node.value, names, code)
         if statements[-1].value.id not in known:
             self._refuse(statements[-1], "the returned symbol is not computed")
         self.result = statements[-1].value.id

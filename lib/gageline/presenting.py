@@ -1,10 +1,12 @@
 """The parts of a report as blocks of the sheet: tables of summary, inputs, loads and bolts, and the checks line by line."""
 
+import re
+
 from . import check, units
-from .connections import bolt_group
 from .editions import REFERENCES
 from .formula import Formula
-from .loads import Demands, permissible as permissible_load
+from .loads import Demands
+from .loads import permissible as permissible_load
 from .render import value_latex
 from .sheet import blocks as sheet
 from .symbols import SYMBOLS
@@ -19,7 +21,6 @@ CAUTIONS = (
     "Limit states listed as by others are not covered here.",
 )
 
-PARTS = {"member": "Member", "bolts": "Bolts", "plate": "Connection plate", "detailing": "Spacing, edges, clearance"}
 
 
 def ratio(each):
@@ -27,18 +28,28 @@ def ratio(each):
     return units.ratio_text(each.ratio)
 
 
+def _length(value):
+    return units.printed(value, 4, 2)
+
+
 def _amount(value, unit, rounded):
     return f"{rounded(value)} {unit}".strip()
 
 
+def runs_of(text):
+    """Return a remark of ours as runs: what stands between dollar signs is a symbol."""
+    parts = text.split("$")
+    return [{"math": part, "alt": part.replace("_", " ")} if i % 2 else part for i, part in enumerate(parts) if part]
+
+
 def required(each):
     """Return what a check requires, never rounded down."""
-    return _amount(each.demand, each.unit, units.ceil_figures if each.kind == "strength" else lambda v: units.printed(v))
+    return _amount(each.demand, each.unit, units.ceil_figures if each.kind == "strength" else _length)
 
 
 def available(each):
     """Return what is available, never rounded up."""
-    return _amount(each.available, each.unit, units.floor_figures if each.kind == "strength" else lambda v: units.printed(v))
+    return _amount(each.available, each.unit, units.floor_figures if each.kind == "strength" else _length)
 
 
 def figure(drawn):
@@ -50,18 +61,20 @@ def cover(calc):
     """Return the cover block of a calculation."""
     connection, job = calc.connection, calc.project
     governs = connection.governing
-    applied = [each.title for each in connection.checks if each.applies]
-    apart = [[each.title, each.reason] for each in connection.checks if not each.applies]
+    applied = [each.title for each in connection.checks if each.applies and each.kind == "strength"]
+    limits = sum(each.applies and each.kind != "strength" for each in connection.checks)
+    applied.append(f"Spacing, edges, clearance, slenderness ({limits} limits)")
+    apart = [[each.title, each.reason] for each in connection.checks if not each.applies and each.kind == "strength"]
     verdict = "all checks satisfied" if connection.ok else "N.G.: not every check is satisfied"
-    taken = [[f"A{i}", text, basis, "stated"] for i, (text, basis) in enumerate(connection.assumptions(), start=1)]
+    taken = [[f"A{i}", runs_of(text), basis, "stated"] for i, (text, basis) in enumerate(connection.assumptions(), start=1)]
     return sheet.cover(
         title=connection.inputs.title or connection.title,
         governing=f"{governs.title} governs: required {required(governs)}, available {available(governs)}, "
                   f"D/C = {ratio(governs)}; {verdict}.",
-        purpose=connection.inputs.purpose or f"{connection.title} of {connection.element.member}: strength of the member's end and of its "
+        purpose=connection.inputs.purpose or f"{connection.title} of {connection.subject}: strength of the member's end and of its "
                                              "connection, from the gross section to the connection plate.",
         criteria=[["Specification", REFERENCES[job.edition]], ["Method", job.method], ["Loads", REFERENCES[job.loads]],
-                  ["Materials", connection.materials_text()], ["Units", "kip, inch, ksi"]],
+                  ["Materials", runs_of(connection.materials_text())], ["Units", "kip, inch, ksi"]],
         scope={"checked": applied, "not_applicable": apart, "by_others": list(connection.by_others())},
         assumptions=taken, open_items=calc.open_items(), cautions=list(CAUTIONS[:3]),
         revisions=[[job.rev, job.date.isoformat(), job.revision_text, job.prepared_by, "", ""]])
@@ -80,7 +93,7 @@ def summary(connection):
     for each in connection.checks:
         if each.kind == "strength" and not each.applies:
             rows.append({"cells": [each.title, each.clause], "span_reason": [2, f"not applicable: {each.reason}"]})
-    columns = [{"head": "Check", "width": 2.75}, {"head": "Clause"}, {"head": "Required", "align": "right"}, {"head": "Available", "align": "right"},
+    columns = [{"head": "Check", "width": 2.6}, {"head": "Clause", "width": 0.85}, {"head": "Required", "align": "right"}, {"head": "Available", "align": "right"},
                {"head": "D/C", "align": "right"}, {"head": ""}]
     out = [sheet.heading(text="Summary"), sheet.table(columns=columns, rows=rows)]
     limits = [each for each in connection.checks if each.kind != "strength"]
@@ -92,20 +105,30 @@ def summary(connection):
 
 def inputs(calc):
     """Return the inputs as executed: given ones with their source, defaults marked so."""
-    rows, group = [], None
+    rows, defaults, group = [], [], None
     for heading, name, meaning, value, given in calc.connection.inputs.shown():
-        if name in ("title", "purpose", "assumptions", "open_items") or (not given and value in ("not given", "none", "")):
+        if not given:
+            defaults += [f"{name} = {value}"] if value not in ("not given", "none", "") else []
+            continue
+        if name in NEEDS_NO_SOURCE:
             continue
         if heading != group:
             rows.append({"cells": [], "span_reason": [0, [{"strong": heading}]]})
             group = heading
-        typed = calc.given[name].value if given else ""
-        if isinstance(typed, str) and any(unit in typed for unit in ("mm", "cm", "kN", "MPa", " m")) and "in" in value + "kip ksi":
+        typed = calc.given[name].value
+        if isinstance(typed, str) and re.search(r"(mm|cm|kN|MPa|psi|lbf| m)$", typed.strip()):
             value = f"{typed} = {value}"
-        source = calc.sources.get(name) or ("" if name in NEEDS_NO_SOURCE else "no source given")
-        rows.append({"cells": [name, meaning, value, source if given else "default"]})
+        rows.append({"cells": [name, meaning, value, calc.sources[name] or "no source given"]})
     columns = [{"head": "Input", "width": 1.35}, {"head": "Meaning", "width": 2.1}, {"head": "Value", "width": 1.45}, {"head": "Source"}]
-    return [sheet.heading(text="Inputs"), sheet.table(columns=columns, rows=rows)]
+    out = [sheet.heading(text="Inputs"), sheet.table(columns=columns, rows=rows)]
+    return [*out, sheet.note(runs=f"Inputs left at their default: {'; '.join(defaults)}.")] if defaults else out
+
+
+def _combination(text):
+    """Return a load combination as maths; W′ is the wind in the opposite sense."""
+    latex = text.replace("W_opp", "W'").replace("Q_E", "Q_{E}").replace("S_DS", "S_{DS}").replace("Ω_0", r"\Omega_0 ").replace("ρ", r"\rho ")
+    latex = re.sub(r"\bLr\b", "L_r", re.sub(r"(?<=\d)Lr", "L_r", latex)).replace("−", "-")
+    return [{"math": latex, "alt": text}]
 
 
 def loads(connection):
@@ -120,10 +143,10 @@ def loads(connection):
             numbers = " ".join(f"{'−' if value < 0 else '+' if i else ''} {units.printed(abs(value))}".strip()
                                for i, value in enumerate(row.terms.values()))
             total = units.printed(row.total)
-            rows.append({"cells": [row.combination.clause, row.combination.text, numbers, total.replace("-", "−")], "strong": governs})
+            rows.append({"cells": [row.combination.clause, _combination(row.combination.text), numbers, total.replace("-", "−")], "strong": governs})
         columns = [{"head": "Clause"}, {"head": "Combination"}, {"head": "With numbers, kip"}, {"head": "Total, kip", "align": "right"}]
         out.append(sheet.table(columns=columns, rows=rows, caption=f"Combinations of {basis.loads_standard}, {basis.method}; tension positive, "
-                                                                   "the governing ones in bold."))
+                                                                   "the governing ones in bold; W′: wind in the opposite sense."))
     else:
         out.append(sheet.prose(runs=f"The required strength is given at {demand.level} level."))
     out.append(sheet.prose(runs=[
@@ -143,7 +166,7 @@ def steps(done, edition):
     out = []
     for step in done:
         if isinstance(step, str):
-            out.append(sheet.prose(runs=step))
+            out.append(sheet.prose(runs=runs_of(step)))
             continue
         formula, values = step
         lines = [line.rendered() for line in formula.lines(*values, edition=edition)]
@@ -157,7 +180,7 @@ def checks(connection, part):
     """Return the checks of one part, every line written out; detailing as one table."""
     if part == "detailing":
         return _detailing(connection)
-    out = [sheet.heading(text=PARTS[part])]
+    out = [sheet.heading(text=connection.parts[part])]
     apart = []
     for each in connection.checks:
         if each.part != part or each.kind != "strength":
@@ -165,7 +188,7 @@ def checks(connection, part):
         if not each.applies:
             apart.append([each.title, each.reason, each.clause])
             continue
-        out.append(sheet.heading(text=each.title.partition(", ")[2].capitalize() if each.part != "bolts" else each.title, level=2))
+        out.append(sheet.heading(text=_within(each), level=2))
         out += steps(each.steps, connection.basis.edition)
         sign = r"\phi " if connection.basis.method == "LRFD" else ""
         nominal = "P_n" if each.axial else "R_n"
@@ -174,9 +197,17 @@ def checks(connection, part):
         out.append(sheet.verdict(lhs=lhs, text=f"{units.ceil_figures(each.demand)} / {units.floor_figures(each.available)}",
                                  ratio_text=ratio(each), ok=each.ok))
         out += [sheet.note(runs=remark) for remark in each.notes]
+    for made in connection.tables(part):
+        out += _table(made)
     if apart:
         out += [sheet.heading(text="Not applicable", level=2), sheet.pairs(rows=apart)]
     return out
+
+
+def _within(each):
+    """Return a check's title as a heading under its part."""
+    title = each.title if each.part == "bolts" else each.title.partition(", ")[2]
+    return title[0].upper() + title[1:]
 
 
 def _detailing(connection):
@@ -195,35 +226,23 @@ def _detailing(connection):
             shown = [{"math": f"{line.sign} = {line.symbolic} = {line.result}" if line.symbolic else f"{line.sign} = {line.result}",
                       "alt": line.reading}]
         verdict = "OK" if each.ok else ("see note" if each.kind == "advice" else "N.G.")
-        rows.append({"cells": [each.title, each.clause, shown, required(each), available(each), ratio(each), verdict],
+        provided = each.demand if each.at_most else each.available
+        bound = f"{'≤' if each.at_most else '≥'} {_amount(each.nominal, each.unit, _length)}"
+        rows.append({"cells": [each.title, each.clause, shown, bound, _amount(provided, each.unit, _length), ratio(each), verdict],
                      "strong": not each.ok})
-    columns = [{"head": "Check", "width": 1.75}, {"head": "Clause", "width": 0.95}, {"head": "Limit", "width": 1.75}, {"head": "Demand", "align": "right"},
-               {"head": "Limit or provided", "align": "right", "width": 0.8}, {"head": "D/C", "align": "right"}, {"head": ""}]
+    columns = [{"head": "Check", "width": 1.6}, {"head": "Clause", "width": 0.75}, {"head": "Limit", "width": 2.0}, {"head": "Required", "align": "right"},
+               {"head": "Provided", "align": "right"}, {"head": "D/C", "align": "right"}, {"head": ""}]
     remarks = dict.fromkeys(remark for each in connection.checks if each.kind != "strength" for remark in each.notes)
-    return [sheet.heading(text=PARTS["detailing"]), sheet.table(columns=columns, rows=rows),
+    return [sheet.heading(text=connection.parts["detailing"]), sheet.table(columns=columns, rows=rows),
             *(sheet.note(runs=remark) for remark in remarks)]
 
 
-def bolt_table(connection):
-    """Return the table of every bolt of one group, nominal strengths."""
-    found = bolt_group.bolt_table(connection.joint)
-    fmt = lambda value: units.printed(value, 3)
-    rows = []
-    for row in found["rows"]:
-        (m_l, m_k, m_b, m_t), (p_l, p_k, p_b, p_t) = row["member"], row["plate"]
-        rows.append({"cells": [str(row["bolt"]), units.fraction(row["x"]), units.fraction(row["y"]), f"{fmt(m_l)} {m_k[0]}", fmt(m_b), fmt(m_t),
-                               f"{fmt(p_l)} {p_k[0]}", fmt(p_b), fmt(p_t), fmt(row["shear"]), units.floor_figures(row["least"])]})
-    heads = ["Bolt", "x, in", "y, in", "member lc, in", "bearing", "tearout", "plate lc, in", "bearing", "tearout", "shear", "least"]
-    columns = [{"head": head, "align": "right"} for head in heads]
-    joints = connection.element.joints
-    sums = found["sums"]
-    return [sheet.heading(text="Every bolt"),
-            sheet.table(columns=columns, rows=rows,
-                        caption="Nominal strengths in kip for one bolt group" + (f" of {joints}" if joints > 1 else "") +
-                                "; e: towards the edge of the part, h: towards the next hole."),
-            sheet.prose(runs=f"Sums over {'all groups' if joints > 1 else 'the group'}, nominal: with the member's holes "
-                             f"{units.floor_figures(sums['member'], 4)} kip, with the plate's holes {units.floor_figures(sums['plate'], 4)} kip; "
-                             f"each bolt limited by the weaker ply {units.floor_figures(sums['stricter'], 4)} kip (a stricter reading, for information).")]
+def _table(made):
+    """Return a family's own table as blocks."""
+    columns = [{"head": runs_of(head), "align": "right" if i else "left"} for i, head in enumerate(made.heads)]
+    rows = [{"cells": [runs_of(cell) for cell in row]} for row in made.rows]
+    out = [sheet.heading(text=made.title, level=2), sheet.table(columns=columns, rows=rows, caption=runs_of(made.caption))]
+    return [*out, sheet.prose(runs=runs_of(made.remark))] if made.remark else out
 
 
 def permissible(connection):
@@ -235,7 +254,7 @@ def permissible(connection):
         if value < 0:
             continue
         found = permissible_load(capacity, service, nature, basis.method, basis.loads, **inputs.load_options())
-        limit = found.combination.text if found.combination else ""
+        limit = _combination(found.combination.text) if found.combination else ""
         largest = f"{units.floor_figures(found.value)} kip" if found.value is not None else "none"
         rows.append({"cells": [nature, f"{units.printed(value)} kip", largest, limit if found.value is not None else found.reason]})
     columns = [{"head": "Load"}, {"head": "As given", "align": "right"}, {"head": "Permissible", "align": "right"}, {"head": "Limited by"}]

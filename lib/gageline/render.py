@@ -55,24 +55,15 @@ class _Slot:
     __str__ = __repr__ = _repr_latex_
 
 
-class _Rename(ast.NodeTransformer):
-    """Give every name of an expression a neutral one, so that no part of it is taken for Greek, a subscript or a function."""
-
-    def __init__(self, names):
-        self.known = {name: f"Z{chr(97 + i)}" for i, name in enumerate(names)}
-
-    def visit_Name(self, node):
-        return ast.Name(self.known.get(node.id, node.id), node.ctx)
-
-
 @functools.lru_cache(maxsize=1024)
 def _template(line):
     """Return the LaTeX of a body line's expression with one slot character per name."""
     from handcalcs.handcalcs import LatexRenderer
 
-    rename = _Rename(line.names)
-    source = ast.unparse(rename.visit(ast.parse(ast.unparse(line.expression), mode="eval")))
-    values = {new: _Slot(i) for i, new in enumerate(rename.known.values())}
+    # Neutral names, so that no part of one is taken for Greek, a subscript or a function.
+    neutral = {name: f"Z{chr(97 + i)}" for i, name in enumerate(line.names)}
+    source = re.sub(r"[A-Za-z_]\w*", lambda match: neutral.get(match[0], match[0]), line.source)
+    values = {new: _Slot(i) for i, new in enumerate(neutral.values())}
     # A trailing sum keeps handcalcs from taking a constant, a name or a bracketed product for a parameter without expression.
     values |= {"Zz": _Slot(99), "Zy": _Slot(98), "pi": _Slot(97)}
     text = LatexRenderer(f"Zy = {source} + Zz", values, {"override": "", "precision": "", "sci_not": ""}).render()

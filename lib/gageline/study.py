@@ -1,14 +1,12 @@
 """Sweeps: the strength of every limit state against the connection's length, from the same limit states that the checks use."""
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 import numpy as np
 
 from . import units
 from .check import FACTORS
 from .loads import Demands
-
-CONTINUOUS_POINTS = 200
 
 
 @dataclass(frozen=True)
@@ -17,24 +15,23 @@ class Curve:
 
     Parameters
     ----------
-    rows, lengths : (n,) rows per line and the length they make at the chosen pitch. [in]
+    lengths : (n,) lengths evaluated. [in]
     strengths : id -> (n,) available strength. [kip]
     titles : id -> what it is called.
-    stretched_lengths, stretched : (m,) lengths that the design's rows make at other pitches, and id -> (m,) strength there. [in, kip]
+    stretched_lengths, stretched : (m,) lengths of another way to lengthen the connection, and id -> (m,) strength there. [in, kip]
     demands : (text, required tension) of every combination that pulls, largest first. [kip]
-    design_rows : rows of the design.
+    sweep : the family's ``Sweep``, with labels and marks.
     sentence : the shortest length that satisfies all, in words.
     """
 
-    rows: np.ndarray
     lengths: np.ndarray
     strengths: dict
     titles: dict
     stretched_lengths: np.ndarray
     stretched: dict
     demands: tuple
-    design_rows: int
-    sentence: str
+    sweep: object
+    sentence: str = ""
 
     @property
     def envelope(self):
@@ -43,82 +40,79 @@ class Curve:
 
     @property
     def stretched_envelope(self):
-        """(m,) the least available strength of the design's rows at other pitches. [kip]"""
+        """(m,) the least available strength of the other way. [kip]"""
         return np.minimum.reduce(list(self.stretched.values())) if self.stretched else np.array([])
 
 
-def available_strengths(connection, joint):
-    """Return id -> available strength of every limit state in tension; arrays where the joint holds arrays. [kip]"""
+def available_strengths(connection, design):
+    """Return id -> available strength of every limit state in tension; arrays where the design holds arrays. [kip]"""
     out = {}
-    for id, _, _, _, state, _, evaluate in connection.limit_states(joint):
+    for id, _, _, _, state, _, evaluate in connection.limit_states(design):
         phi, omega = FACTORS[state]
-        nominal = evaluate(joint).nominal
+        nominal = evaluate(design).nominal
         out[id] = phi * nominal if connection.basis.method == "LRFD" else nominal / omega
     return out
 
 
+def over(connection, design, shape):
+    """Return id -> available strength, broadcast to a shape, of a design that holds arrays. [kip]"""
+    return {id: np.broadcast_to(value, shape) for id, value in available_strengths(connection, design).items()}
+
+
 def over_pitch(connection, pitches):
-    """Return id -> available strength of the design's rows at an array of pitches.
+    """Return id -> (n,) available strength of a bolted design's rows at an array of pitches. [kip]
 
     Parameters
     ----------
     connection : a bolted connection with lines and rows.
     pitches : (n,) spacing along the line. [in]
-
-    Returns
-    -------
-    dict
-        id -> (n,) available strength. [kip]
     """
     pitches = np.asarray(pitches, dtype=float)
-    found = available_strengths(connection, connection.at(pitch=pitches))
-    return {id: np.broadcast_to(value, pitches.shape) for id, value in found.items()}
+    return over(connection, connection.at(pitch=pitches), pitches.shape)
 
 
 def capacity_curve(connection):
-    """Return the strength of every limit state for one row of bolts more and more, or None where holes are given one by one."""
-    given = connection.inputs
-    if given.holes:
-        return None
-    design, pitch = given.rows, given.pitch or 3.0
-    first = 1 if connection.element.eccentricity is None or given.U_by_hand is not None else 2
-    rows = np.arange(first, max(design + 4, 8) + 1)
-    points = [available_strengths(connection, connection.at(rows=int(n), pitch=pitch)) for n in rows]
-    strengths = {id: np.array([float(point[id]) for point in points]) for id in points[0]}
-    titles = {row[0]: row[1] for row in connection.limit_states(connection.joint)}
-    lengths = (rows - 1) * pitch + abs(given.stagger) * (given.lines > 1)
+    """Return the ``Curve`` of a connection, or a sentence why there is none."""
+    sweep = connection.sweep()
+    if isinstance(sweep, str):
+        return sweep
+    lengths = np.asarray(sweep.lengths, dtype=float)
+    if isinstance(sweep.designs, (list, tuple)):
+        points = [available_strengths(connection, design) for design in sweep.designs]
+        strengths = {id: np.array([float(point[id]) for point in points]) for id in points[0]}
+    else:
+        strengths = over(connection, sweep.designs, lengths.shape)
     stretched_lengths, stretched = np.array([]), {}
-    if design > 1:
-        thinner = min(connection.joint.member.t, connection.joint.plate.t)
-        least, most = 8 / 3 * connection.size.d, max(pitch, min(24 * thinner, 12.0, 2 * pitch))
-        pitches = np.linspace(least, most, CONTINUOUS_POINTS)
-        stretched = over_pitch(connection, pitches)
-        stretched_lengths = (design - 1) * pitches + abs(given.stagger) * (given.lines > 1)
-    curve = Curve(rows, lengths, strengths, titles, stretched_lengths, stretched, _demands(connection), design, "")
-    return Curve(*(getattr(curve, name) for name in list(Curve.__dataclass_fields__)[:-1]), _sentence(connection, curve, pitch))
+    if sweep.stretched:
+        stretched_lengths = np.asarray(sweep.stretched[0])
+        stretched = over(connection, sweep.stretched[1], stretched_lengths.shape)
+    titles = {row[0]: row[1] for row in connection.limit_states(connection.design)}
+    curve = Curve(lengths, strengths, titles, stretched_lengths, stretched, _demands(connection), sweep)
+    return replace(curve, sentence=_sentence(connection, curve))
 
 
 def _demands(connection):
     if isinstance(connection.demand, Demands):
-        rows = {(row.combination.text, row.total) for row in connection.demand.rows if row.total > 0}
+        rows = {(row.combination.text.replace("W_opp", "W′"), row.total) for row in connection.demand.rows if row.total > 0}
         return tuple(sorted(rows, key=lambda row: -row[1]))
     return (("given demand", connection.demand.required_tension),)
 
 
-def _sentence(connection, curve, pitch):
-    T = connection.demand.required_tension
-    said = f"{units.ceil_figures(T)} kip"
-    enough = np.flatnonzero(curve.envelope >= T * (1 - 1e-12))
+def _sentence(connection, curve):
+    T, sweep = connection.demand.required_tension, curve.sweep
+    said, envelope = f"{units.ceil_figures(T)} kip", curve.envelope
+
+    def limit(i):
+        return curve.titles[min(curve.strengths, key=lambda id: curve.strengths[id][i])]
+
+    enough = np.flatnonzero(envelope >= T * (1 - 1e-12))
     if not len(enough):
-        best = int(np.argmax(curve.envelope))
-        limit = min(curve.strengths, key=lambda id: curve.strengths[id][best])
-        return (f"No length up to {curve.rows[-1]} rows carries {said}: {curve.titles[limit]} limits it to "
-                f"{units.floor_figures(curve.envelope[best])} kip.")
+        best = int(np.argmax(envelope))
+        return (f"No length up to {sweep.describe(len(envelope) - 1)} carries {said}: the most is {units.floor_figures(envelope[best])} kip, "
+                f"limited by: {limit(best)}.")
     i = int(enough[0])
-    limit = min(curve.strengths, key=lambda id: curve.strengths[id][i])
-    n = int(curve.rows[i])
-    text = (f"The shortest length that carries {said} in every limit state is {n} row{'s' if n > 1 else ''} at {units.fraction(pitch)} in, "
-            f"l = {units.fraction(float(curve.lengths[i]))} in; {curve.titles[limit]} governs there with {units.floor_figures(curve.envelope[i])} kip.")
-    if curve.design_rows > n:
-        text += f" This design has {curve.design_rows} rows."
+    text = (f"The shortest connection that carries {said} in every limit state is {sweep.describe(i)}; "
+            f"governing there: {limit(i)}, {units.floor_figures(envelope[i])} kip.")
+    if sweep.design is not None and sweep.design != i:
+        text += f" This design has {sweep.describe(sweep.design)}."
     return text

@@ -32,6 +32,7 @@ def _table(text):
 
 
 SYMBOLS = _table(r"""
+A_a    | A_a                 | in² | area of what hangs on the element and tears with it
 A_b    | A_b                 | in² | nominal unthreaded body area of a bolt
 A_c    | A_c                 | in² | gross area of the directly connected elements
 A_e    | A_e                 | in² | effective net area

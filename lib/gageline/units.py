@@ -150,19 +150,30 @@ def fraction(value, denominator=16, unit=""):
     return ("−" if value < 0 else "") + text + unit
 
 
+def feet(value):
+    """Return inches as feet and inches.
+
+    >>> feet(270.0), feet(126.5)
+    ("22'-6\"", "10'-6½\"")
+    """
+    whole, rest = divmod(value, 12.0)
+    return f"{int(whole)}'-{fraction(rest)}\""
+
+
 def printed(value, digits=4, places=0):
     """Return a number for print: exact short decimals as they are, others to ``digits`` significant figures.
 
     ``places`` is the least number of decimals kept on a short decimal, so that 3 prints as 3.00 where that is the custom.
 
-    >>> printed(0.8125), printed(2.87822), printed(65.0), printed(3.0, places=2), printed(12345.6)
-    ('0.8125', '2.878', '65', '3.00', '12346')
+    >>> printed(0.8125), printed(2.87822), printed(65.0), printed(3.0, places=2), printed(1.1875, places=2), printed(468.52)
+    ('0.8125', '2.878', '65', '3.00', '1.1875', '468.5')
     """
     if value == 0:
         return f"{0.0:.{places}f}"
     size = math.floor(math.log10(abs(value)))
     shortest = next((n for n in range(places, 5) if abs(value - round(value, n)) <= 1e-12 * abs(value)), None)
-    if shortest is not None and size + 1 + shortest <= max(digits, 5):
+    # Lengths keep a fifth figure: 1-3/16 in is 1.1875 in.
+    if shortest is not None and size + 1 + shortest <= digits + (places > 0):
         return f"{value:.{shortest}f}"
     return f"{value:.{max(0, digits - 1 - size)}f}"
 

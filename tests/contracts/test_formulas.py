@@ -302,7 +302,7 @@ def branch(F_y, A_g):
 
 
 def loop(F_y, A_g):
-    for P_n in (F_y, A_g):
+    for P_n in (F_y, A_g):  # noqa: B007
         pass
     return P_n
 

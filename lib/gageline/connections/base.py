@@ -1,5 +1,6 @@
 """What every family of connection shares: who it is for, its loads, its list of checks and its results as data."""
 
+from dataclasses import dataclass
 from functools import cached_property
 from typing import Literal
 
@@ -77,15 +78,55 @@ SERVICE = {"D": "P_D", "L": "P_L", "Lr": "P_Lr", "S": "P_S", "R": "P_R", "W": "P
 """Nature of a load -> the input that holds it."""
 
 
+@dataclass(frozen=True)
+class Table:
+    """A table of a family's own: heads and rows of text, a caption, a remark below; numbers right of the first column."""
+
+    title: str
+    heads: tuple
+    rows: tuple
+    caption: str = ""
+    remark: str = ""
+
+
+@dataclass(frozen=True)
+class Sweep:
+    """How a family's connection grows: what a study evaluates to draw strength against length.
+
+    Parameters
+    ----------
+    lengths : (n,) connection lengths of ``designs``. [in]
+    designs : n designs that ``limit_states`` evaluates one by one, or one that holds arrays of shape (n,).
+    design : index of the design itself, or None where it is none of them.
+    describe : function of an index that says how the connection is made ("4 rows at 3 in").
+    stretched : (lengths (m,), design holding arrays of shape (m,)) of another way to lengthen it, or None.
+    stretched_name : what that other way is, in words.
+    label : what the length is, for the axis.
+    marks : (n,) short texts beside the lengths ("4 rows"), or () on a continuous sweep.
+    """
+
+    lengths: object
+    designs: object
+    design: int | None
+    describe: object
+    stretched: tuple | None = None
+    stretched_name: str = ""
+    label: str = "connection length l, in"
+    marks: tuple = ()
+
+
 class Connection:
     """A designed connection: validated inputs, and every check on the load path computed once.
 
-    A family gives ``Model`` (its inputs), ``family`` and ``title`` (its name in words), and ``_checks()``.
+    A family gives: ``Model`` (its inputs), ``family`` and ``title`` (its name in words), ``parts`` (part of the load path -> heading,
+    in the order of the report), ``design`` (what ``limit_states`` evaluates), ``limit_states(design)``, ``_checks()``, ``subject``,
+    ``materials_text()``, ``designed()``, ``sweep()``; and where it has them ``tables()`` and ``drawings()``.
     """
 
     family = ""
     title = ""
     Model = CalcInputs
+    parts = {}
 
     def __init__(self, inputs, basis=None):
         self.inputs = inputs
@@ -143,3 +184,15 @@ class Connection:
     def by_others(self):
         """Return what the scope leaves to others."""
         return ()
+
+    def tables(self, part):
+        """Return the family's own tables of a part of the load path."""
+        return ()
+
+    def drawings(self):
+        """Return the figures of the connection as designed."""
+        return ()
+
+    def sweep(self):
+        """Return the ``Sweep`` of the connection's length, or a sentence why there is none."""
+        return "Not drawn: this connection has no length along the load that could be varied."

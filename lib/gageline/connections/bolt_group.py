@@ -57,7 +57,8 @@ def at_holes(joint, ply, reversed_load=False):
     classes = _classes(ply, reversed_load)
 
     def compute(do):
-        r_nv = bolt_shear(joint, do)
+        do.say("Shear of one bolt as in the check of the bolts alone.")
+        r_nv = bolt_shear(joint, silent)
         R_n = None
         t = ply.n_plies * ply.t
         if ply.n_plies > 1:

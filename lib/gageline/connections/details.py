@@ -18,7 +18,7 @@ def _limit(id, title, part, clause, required, provided, steps, kind="detailing",
     """Return a detailing check; ``at_most`` where the provided value may not exceed the limit."""
     demand, available = (provided, required) if at_most else (required, provided)
     return Check(id, title, part, clause, kind=kind, nominal=required, available=available, demand=demand, unit=unit, steps=tuple(steps),
-                 notes=tuple(notes))
+                 notes=tuple(notes), at_most=at_most)
 
 
 def minimum_spacing(joint, edition):

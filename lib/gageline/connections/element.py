@@ -90,7 +90,7 @@ def element(designation, way=None, gap=0.0):
         raise InputError(f"member {shape.name}: series {shape.series} has no bolted end here; bolted are {', '.join(WAYS)}")
     ways = WAYS[shape.series]
     single = shape.single or shape
-    if way == "leg" and "long leg" in ways or way is None and "long leg" in ways and single.b_long == single.b_short:
+    if (way == "leg" and "long leg" in ways) or (way is None and "long leg" in ways and single.b_long == single.b_short):
         if single.b_long != single.b_short:
             raise InputError(f"connected_by: {shape.name} has unequal legs; give long leg or short leg")
         way = "long leg"

@@ -94,7 +94,7 @@ class Inputs(BaseModel):
 
 def display(value, field):
     """Return an input's value as printed in the inputs table."""
-    unit = next((mark.unit for mark in field.metadata if isinstance(mark, _Quantity)), None)
+    unit = _unit(field)
     if value is None:
         return "not given"
     if unit == "rad":
@@ -103,7 +103,7 @@ def display(value, field):
         if isinstance(value, tuple):
             return "; ".join(", ".join(units.fraction(v) for v in p) if isinstance(p, tuple) else units.fraction(p) for p in value) + " in" \
                 if value else "none"
-        return units.fraction(value) + " in"
+        return units.fraction(value) + " in" + (f" ({units.feet(value)})" if value >= 24 else "")
     if unit is not None:
         return f"{units.printed(value)} {unit}".strip()
     if isinstance(value, bool):
@@ -111,6 +111,12 @@ def display(value, field):
     if isinstance(value, tuple):
         return "; ".join(value) if value else "none"
     return str(value)
+
+
+def _unit(field):
+    """Return the display unit of a quantity field, also where it may be None; None for other fields."""
+    marks = [*field.metadata, *(mark for part in get_args(field.annotation) for mark in getattr(part, "__metadata__", ()))]
+    return next((mark.unit for mark in marks if isinstance(mark, _Quantity)), None)
 
 
 def _sentence(cls, error):

@@ -30,7 +30,7 @@ def gross_yielding(joint):
     ply = joint.plate
 
     def compute(do):
-        return do(tension.gross_yielding, ply.F_y, _area(do, ply, ply.width))
+        return do(connecting.plate_yielding, ply.F_y, _area(do, ply, ply.width))
 
     return worked(compute)
 
@@ -62,7 +62,7 @@ def whitmore_yielding(joint):
 
     def compute(do):
         A_g, _ = whitmore_area(do, joint)
-        return do(tension.gross_yielding, joint.plate.F_y, A_g)
+        return do(connecting.plate_yielding, joint.plate.F_y, A_g)
 
     out = worked(compute)
     return out._replace(path=spread(joint)) if not isinstance(out.nominal, np.ndarray) else Outcome(out.nominal)
@@ -77,7 +77,7 @@ def whitmore_rupture(joint):
         d_n = do(tension.hole_width, ply.hole.across, DAMAGE)
         A_h = do(tension.first_hole_loss, ply.pieces * len(found.holes_in_row), d_n, ply.t)
         A_n = do(tension.net_area_straight, A_g, A_h)
-        return do(tension.net_rupture, ply.F_u, do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1)))
+        return do(connecting.plate_rupture, ply.F_u, do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1)))
 
     out = worked(compute)
     return out._replace(path=spread(joint)) if not isinstance(out.nominal, np.ndarray) else Outcome(out.nominal)

@@ -7,7 +7,7 @@ import numpy as np
 
 from ..check import governing
 from ..geometry import chain_through, critical_chains, lines_of
-from ..provisions import tension
+from ..provisions import connecting, tension
 from .joint import DAMAGE
 from .outcome import Outcome, worked
 
@@ -38,17 +38,17 @@ def net_rupture(joint):
     return Outcome(nominal, steps, chain, notes)
 
 
-def plate_rupture(joint, ply):
+def plate_rupture(ply):
     """Return rupture of the connection plates over their physical width; every element is connected, so U = 1.0."""
     A_g = ply.pieces * ply.width * ply.t
 
     def strength(chain, do):
         A_n = net_area(do, chain, A_g, ply.pieces, ply.holes)
-        if np.all(chain.n_ahead == 0):
-            return do(tension.net_rupture, ply.F_u, do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1)))
-        do.say(f"The chain lies behind {chain.n_ahead} of the {chain.n_total} bolts.")
         A_e = do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1))
-        return do(tension.net_rupture_behind_lead_row, ply.F_u, A_e, do(tension.load_share, chain.n_total, chain.n_ahead))
+        if np.all(chain.n_ahead == 0):
+            return do(connecting.plate_rupture, ply.F_u, A_e)
+        do.say(f"The chain lies behind {chain.n_ahead} of the {chain.n_total} bolts.")
+        return do(connecting.plate_rupture_behind_lead_row, ply.F_u, A_e, do(tension.load_share, chain.n_total, chain.n_ahead))
 
     nominal, chain, steps = governing(_chains(ply.holes, ply.width * ply.t), strength)
     return Outcome(nominal, steps, chain)
@@ -111,7 +111,7 @@ def shear_lag(joint, do):
     U_2 = do(tension.shear_lag_case_2, x_bar, joint.length)
     U_A = do(tension.connected_area_ratio, element.A_c, element.A_g)
     if element.case == "7 flange" and rows >= 3:
-        do.say(f"Case 7 is permitted too: {rows} bolts in line, b_f {'at least' if element.wide_flange else 'less than'} two thirds of d; "
+        do.say(f"Case 7 is permitted too: {rows} bolts in line, $b_f$ {'at least' if element.wide_flange else 'less than'} two thirds of $d$; "
                "the largest value is taken.")
         U_7 = do(tension.shear_lag_case_7_wide_flange if element.wide_flange else tension.shear_lag_case_7_narrow_flange)
         return do(tension.largest_of_cases_2_and_7, U_2, U_7, U_A)

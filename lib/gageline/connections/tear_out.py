@@ -49,7 +49,12 @@ def _written_out(do, block, ply):
             do(connecting.more_shear_plane_holes, A_hv, lost, d_along, t)
     A_nv = do(connecting.net_shear_area, A_gv, A_hv or 0.0)
     across = sum(plane.n_holes for plane in block.tension)
-    A_gt = ply.pieces * block.A_gt
+    width = sum(plane.y1 - plane.y0 for plane in block.tension)
+    attached = block.A_gt - width * ply.t
+    if attached > 1e-9:
+        A_gt = do(connecting.gross_tension_area_with_attached, ply.pieces, width, ply.t, attached)
+    else:
+        A_gt = do(connecting.gross_tension_area, ply.pieces, width, ply.t)
     if across:
         d_across = do(tension.hole_width, ply.hole.across, DAMAGE) if ply.hole.across != ply.hole.along else d_along
         A_ht = do(connecting.tension_plane_holes, ply.pieces * across, d_across, ply.t)

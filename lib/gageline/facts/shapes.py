@@ -257,7 +257,7 @@ def _lookup(series, size):
 
 
 def _same(key, known):
-    if len(key) != len(known) or key[-1:] != known[-1:] and isinstance(known[-1], str):
+    if len(key) != len(known) or (key[-1:] != known[-1:] and isinstance(known[-1], str)):
         return False
     return all(a == b if isinstance(b, str) else abs(a - b) < _ROUNDING for a, b in zip(key, known))
 

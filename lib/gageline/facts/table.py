@@ -51,7 +51,7 @@ def number(text):
     1.125
     """
     match = _NUMBER.fullmatch(text.strip())
-    if not match or match[3] and not int(match[3]):
+    if not match or (match[3] and not int(match[3])):
         raise InputError(f"{text.strip()!r} is not a number such as 3/4, 1-1/8 or 0.75")
     whole, top, bottom, decimal = match.groups()
     return float(decimal) if decimal else int(whole or 0) + int(top) / int(bottom)

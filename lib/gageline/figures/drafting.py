@@ -1,7 +1,7 @@
 """A drawing to scale: lines, fills and text in inches of the real thing, dimensions and labels in points of the paper."""
 
 import math
-from itertools import groupby
+from itertools import groupby, pairwise
 
 from ..units import fraction
 from . import style
@@ -27,6 +27,13 @@ class Drawing:
         self.axes.set_axis_off()
         self.scale = scale
 
+    @classmethod
+    def measure(cls, scale):
+        """Return a Drawing without paper, to measure with before the size of the paper is known."""
+        bare = cls.__new__(cls)
+        bare.scale = scale
+        return bare
+
     def pt(self, points=1.0):
         """Return the inches of the part that lie under so many points of the paper."""
         return points / 72.0 / self.scale
@@ -36,13 +43,15 @@ class Drawing:
         from matplotlib.patches import Polygon
 
         patch = Polygon(corners, closed=True, fc=colour, ec=line or "none", lw=weight if line else 0.0, zorder=z, gid=gid, joinstyle="miter")
-        return self.axes.add_patch(patch)
+        return self.axes.add_artist(patch)
 
     def line(self, corners, weight=style.OUTLINE, dash="-", colour=style.INK, z=3.0, gid=None, within=None):
         """Draw a line through corners, cut off outside the polygon ``within``."""
-        xs, ys = zip(*corners)
-        (drawn,) = self.axes.plot(xs, ys, lw=weight, ls=dash, color=colour, zorder=z, gid=gid, solid_capstyle="butt", dash_capstyle="butt",
-                                  solid_joinstyle="miter", dash_joinstyle="miter")
+        from matplotlib.lines import Line2D
+
+        drawn = Line2D(*zip(*corners), lw=weight, ls=dash, color=colour, zorder=z, gid=gid, solid_capstyle="butt", dash_capstyle="butt",
+                       solid_joinstyle="miter", dash_joinstyle="miter")
+        self.axes.add_artist(drawn)  # plot() would reckon limits anew for each of some hundred lines
         if within is not None:
             drawn.set_clip_path(within)
         return drawn
@@ -54,11 +63,11 @@ class Drawing:
         r = min(across, along) / 2
         look = {"fc": fill or "none", "ec": style.INK, "lw": weight, "ls": dash, "zorder": z, "gid": gid}
         if abs(across - along) < 1e-9:
-            return self.axes.add_patch(Circle((x, y), r, **look))
+            return self.axes.add_artist(Circle((x, y), r, **look))
         core_x, core_y = along / 2 - r, across / 2 - r
         box = FancyBboxPatch((x - core_x, y - core_y), 2 * core_x, 2 * core_y, boxstyle=f"round,pad={r},rounding_size={r}", mutation_aspect=1,
                              **look)
-        return self.axes.add_patch(box)
+        return self.axes.add_artist(box)
 
     def text(self, x, y, text, size=style.TYPE, ha="left", upright=False, colour=style.INK, middle=False, weight="normal", z=9.0):
         """Set a text on its baseline, or with ``middle`` centred on the point; ``upright`` turns it to be read from the right."""
@@ -77,15 +86,12 @@ class Drawing:
         self.line([tail, neck], weight, colour=colour, z=8)
         self.fill([head, (neck[0] - 0.36 * a * uy, neck[1] + 0.36 * a * ux), (neck[0] + 0.36 * a * uy, neck[1] - 0.36 * a * ux)], colour, z=8)
 
-    def leader(self, point, elbow, text, ha="left", dot=True, size=style.TYPE):
-        """Label a point: a dot on it, a thin line to the elbow, the text there."""
-        self.line([point, elbow], style.HAIR, z=8)
-        if dot:
-            from matplotlib.patches import Circle
+    def leader(self, point, elbow):
+        """Draw a leader: a dot on a point of the part, a thin line to the elbow."""
+        from matplotlib.patches import Circle
 
-            self.axes.add_patch(Circle(point, self.pt(1.3), fc=style.INK, ec="none", zorder=8))
-        gap = self.pt(2.5)
-        self.text(elbow[0] + (gap if ha == "left" else -gap), elbow[1], text, size, ha, middle=True)
+        self.line([point, elbow], style.HAIR, z=8)
+        self.axes.add_artist(Circle(point, self.pt(1.3), fc=style.INK, ec="none", zorder=8))
 
     def across(self, stops, y, starts, texts=None):
         """Dimension distances along x on a line at the height y.
@@ -119,13 +125,18 @@ class Drawing:
             if tail is not None:
                 self.line([at(stops[0] if tail < stops[0] else stops[-1], level), at(tail, level)], style.THIN, z=7)
             off = self.pt(2.2 + row * style.SMALL)
-            self.text(*at(centre, level - off if upright else level + off), text, style.SMALL, "center", upright)
+            base = level - off if upright else level + off
+            half, rise = self.pt(style.text_width(text, style.SMALL) / 2 + 0.8), self.pt(-5.8 if upright else 5.8)
+            # Extension lines of other chains stop short of a text.
+            self.fill([at(centre - half, base), at(centre + half, base), at(centre + half, base + rise), at(centre - half, base + rise)],
+                      style.PAPER, 6.0)
+            self.text(*at(centre, base), text, style.SMALL, "center", upright)
 
     def placed(self, stops, texts):
         """Return (text, centre, line of text, end of the line drawn out) for each space of a chain, no two texts overlapping. [in]"""
         out, last = [], len(texts) - 1
         for k, (a, b, text) in enumerate(zip(stops, stops[1:], texts)):
-            wide = self.pt(style.text_width(text, style.SMALL) + 3.0)
+            wide = self.pt(style.text_width(text, style.SMALL) + 6.5)
             centre, row, tail = (a + b) / 2, 0, None
             if wide > b - a and k in (0, last):
                 sense = 1.0 if k == last else -1.0
@@ -144,18 +155,20 @@ class Drawing:
 
 
 def _fractions(stops):
-    return [fraction(b - a) for a, b in zip(stops, stops[1:])]
+    return [fraction(b - a) for a, b in pairwise(stops)]
 
 
 def grouped(stops, most_single=2):
-    """Return (stops, texts) of a chain in which more than ``most_single`` equal spaces in a row are one: "3 @ 3".
+    """Return (stops, texts) of a chain from edge to edge in which more than ``most_single`` equal spaces in a row are one: "3 @ 3".
 
-    >>> grouped([0.0, 2.0, 5.0, 8.0, 11.0, 12.5])
-    ([0.0, 2.0, 11.0, 12.5], ['2', '3 @ 3', '1½'])
+    The first and the last space are distances from edges and stay by themselves.
+
+    >>> grouped([0.0, 3.0, 6.0, 9.0, 12.0, 15.0])
+    ([0.0, 3.0, 12.0, 15.0], ['3', '3 @ 3', '3'])
     """
-    spaces = [round(b - a, 6) for a, b in zip(stops, stops[1:])]
-    kept, texts, at = [stops[0]], [], 0
-    for space, run in groupby(spaces):
+    spaces = [round(b - a, 6) for a, b in pairwise(stops)]
+    kept, texts, at = stops[:2], [fraction(spaces[0])], 1
+    for space, run in groupby(spaces[1:-1]):
         n = len(list(run))
         if n > most_single:
             kept.append(stops[at + n])
@@ -164,7 +177,7 @@ def grouped(stops, most_single=2):
             kept += stops[at + 1:at + n + 1]
             texts += [fraction(space)] * n
         at += n
-    return kept, texts
+    return [*kept, stops[-1]], [*texts, fraction(spaces[-1])]
 
 
 def broken(a, b, amplitude, upright=True, at=0.27):

@@ -1,179 +1,17 @@
 """Elevation of a connection on the connected element, drawn from the joint that is computed, and what tears or ruptures in it."""
 
 import math
-from dataclasses import dataclass
+from itertools import pairwise
 
 from ..check import worst_first
-from ..geometry import Block, Chain, lines_of, polyline
+from ..geometry import Block, Chain, lines_of
 from ..units import ceil_figures, fraction, ratio_text
 from . import style
 from .drafting import Drawing, broken, grouped
-
-PATHS = (("member rupture",), ("member block",), ("plate rupture",), ("plate block",), ("Whitmore yielding", "Whitmore rupture"))
-"""Checks with a path to draw; of those in one entry, which share a path, the one with the larger ratio."""
+from .scene import trace, view
 
 TALLEST = 3.7  # [in] of an elevation on paper: a figure, its caption and some text fit one sheet
 LARGEST = 0.38  # scale beyond which a small pattern looks coarse
-BACK_OFF = 1.15  # plate drawn beside the member, as a part of the member's depth, before it is broken off
-
-
-@dataclass(frozen=True)
-class View:
-    """What an elevation shows, in the joint's own coordinates. [in]
-
-    Parameters
-    ----------
-    lo, hi : lower and upper outline of the member. features : y of its inner edges (a stem, a heel, flanges).
-    unfolded : y to which an outstanding leg with open holes is unfolded, or None.
-    left, end : where the member is broken off, where it ends.
-    plate_lo, plate_hi : the plate's edges. shown_lo, shown_hi : how far it is drawn. right : where it is broken off or supported.
-    support : x of the support, or None where it is not drawn.
-    """
-
-    joint: object
-    lo: float
-    hi: float
-    features: tuple
-    unfolded: float | None
-    left: float
-    end: float
-    plate_lo: float
-    plate_hi: float
-    shown_lo: float
-    shown_hi: float
-    right: float
-    support: float | None
-
-    @property
-    def bottom(self):
-        """Lowest y drawn."""
-        return min(self.lo, self.shown_lo, self.lo if self.unfolded is None else self.unfolded)
-
-    @property
-    def top(self):
-        """Highest y drawn."""
-        return max(self.hi, self.shown_hi)
-
-    @property
-    def axis(self):
-        """y halfway between the outer gage lines."""
-        ys = [hole.y for hole in self.joint.pattern]
-        return (min(ys) + max(ys)) / 2
-
-    def free_edge(self, y):
-        """x of the plate's free edge at the height y."""
-        return -self.joint.plate.end.at(y - self.plate_lo)
-
-    @property
-    def wide(self):
-        """(least x, greatest x) drawn."""
-        edges = [self.free_edge(y) for y in (self.shown_lo, self.shown_hi)]
-        return min(self.left, *edges), max(self.right, self.end)
-
-
-@dataclass(frozen=True)
-class Trace:
-    """The path of a check in the joint's own coordinates: filled polygons, lines sheared and lines torn, thin lines. [in]"""
-
-    part: str
-    pieces: tuple = ()
-    shear: tuple = ()
-    torn: tuple = ()
-    spread: tuple = ()
-
-    @property
-    def ys(self):
-        """Every y of its polygons and spread, which have to be drawn whole."""
-        return [y for line in (*self.pieces, *self.spread) for _, y in line]
-
-
-def trace(joint, check):
-    """Return the Trace of a check's path.
-
-    Parameters
-    ----------
-    joint : the joint. check : a Check whose path is a Chain, a Block or a Whitmore width.
-    """
-    path, part = check.path, check.part
-    y0 = _plate_lo(joint)
-
-    def placed(points):
-        return tuple((-x, y + y0) for x, y in points) if part == "plate" else tuple(points)
-
-    if isinstance(path, Block):
-        shear = tuple(placed([(plane.x0, plane.y), (plane.x1, plane.y)]) for plane in path.shear)
-        torn = tuple(placed([(plane.x0, plane.y0), (plane.x1, plane.y1)]) for plane in path.tension if plane.y0 != plane.y1)
-        return Trace(part, tuple(placed(piece) for piece in path.outline), shear, torn)
-    if isinstance(path, Chain):
-        ply = joint.plate if part == "plate" else joint.member
-        corners = list(polyline(path, ply.holes, ply.width))
-        if part == "member":
-            low, high = _outline(joint.element)
-            unfolded = _unfolded(joint)
-            bottom = low if unfolded is None or min(ply.holes[i].y for i in path.holes) >= 0 else unfolded
-            corners[0], corners[-1] = (corners[0][0], bottom), (corners[-1][0], high)
-        return Trace(part, torn=(placed(corners),))
-    lines = tuple(tuple((x, y + y0) for x, y in line) for line in path.lines)
-    width = ((path.x_row, path.y_lo + y0), (path.x_row, path.y_hi + y0))
-    return Trace(part, torn=(width,), spread=lines)
-
-
-def shown_check(connection):
-    """Return the check an elevation shows: the governing one if it has a path, else the member's path with the largest ratio."""
-    if connection.governing.path is not None:
-        return connection.governing
-    drawn = [check for check in connection.checks if check.path is not None and check.kind == "strength"]
-    return next(iter(worst_first([check for check in drawn if check.part == "member"]) or worst_first(drawn)), None)
-
-
-def _plate_lo(joint):
-    return joint.pattern[0].y - joint.plate.holes[0].y
-
-
-def _outline(element):
-    """Lower and upper outline of the member: the strip, and a flange in whose thickness the strip ends."""
-    shape = element.section
-    if element.name == "web":
-        return -shape.t_f, element.width + shape.t_f
-    if element.name == "stem":
-        return -shape.t_f, element.width
-    return 0.0, element.width
-
-
-def _unfolded(joint):
-    element = joint.element
-    if all(hole.y >= 0 for hole in joint.member.holes):
-        return None
-    single = element.section.single or element.section
-    return single.t - (single.b_long + single.b_short - element.width)
-
-
-def view(joint, path=None):
-    """Return the View of a joint that shows a Trace whole and breaks off what is far from the member."""
-    element, xs = joint.element, [hole.x for hole in joint.pattern]
-    lo, hi = _outline(element)
-    plate_lo = _plate_lo(joint)
-    plate_hi = plate_lo + joint.plate.width
-    depth = hi - lo
-    must = path.ys if path else []
-    room = max(BACK_OFF * depth, 0.45 * (max(xs) - min(xs)))
-    shown_lo = plate_lo if lo - plate_lo <= room else min(lo - 0.6 * room, *(y - 0.08 * depth for y in must), lo)
-    shown_hi = plate_hi if plate_hi - hi <= room else max(hi + 0.6 * room, *(y + 0.08 * depth for y in must), hi)
-    shown_lo, shown_hi = max(shown_lo, plate_lo), min(shown_hi, plate_hi)
-    end = joint.member.end.at(0.0)
-
-    def edge(y):
-        return -joint.plate.end.at(y - plate_lo)
-
-    over = [edge(y) for y in (max(lo, shown_lo), min(hi, shown_hi))]
-    core = end - min(min(xs), *over)
-    left = min(min(xs), *over) - max(0.2 * core, 0.16 * depth, 1.2)
-    right = max(end, *(edge(y) for y in (shown_lo, shown_hi))) + max(0.13 * core, 0.1 * depth, 1.0)
-    support = max(xs) + joint.gusset.length if joint.gusset.length is not None else None
-    if support is not None and not end < support <= end + 0.8 * core + 2:
-        support = None
-    features = tuple(y for y in element.faces if lo < y < hi)
-    return View(joint, lo, hi, features, _unfolded(joint), left, end, plate_lo, plate_hi, shown_lo, shown_hi, support or right, support)
 
 
 def draw(paper, seen, path, numbers=True):
@@ -247,7 +85,7 @@ def _holes(paper, seen, front, numbers):
         paper.hole(bolt.x, bolt.y, hole.across, hole.along, gid=f"hole-{i + 1}")
         if not alike:
             paper.hole(bolt.x, bolt.y, other.across, other.along, fill=None, dash=style.HIDDEN, weight=style.THIN, z=6.1)
-        if max(hole.across, hole.along) > joint.bolts.d + 0.12:
+        if at_front.kind != "STD":
             paper.hole(bolt.x, bolt.y, joint.bolts.d, joint.bolts.d, fill=style.FAINT, weight=style.THIN, z=6.2)
         reach = paper.pt(2.0)
         wide, tall = hole.along / 2 + reach, hole.across / 2 + reach
@@ -264,16 +102,16 @@ def _holes(paper, seen, front, numbers):
             paper.line([(hole.x - reach, hole.y), (hole.x + reach, hole.y)], style.HAIR, z=6.5)
             paper.line([(hole.x, hole.y - reach), (hole.x, hole.y + reach)], style.HAIR, z=6.5)
     if numbers and seen.unfolded is not None:
-        paper.text(seen.end - paper.pt(3), seen.unfolded + paper.pt(4), "outstanding leg unfolded, open holes", style.TINY, "right")
+        paper.text(seen.left + paper.pt(22), seen.unfolded + paper.pt(4), "unfolded leg, open holes", style.TINY)
 
 
 def _numbered(paper, joint):
     """Indices of the bolts that there is room to number: all, or the first and the last of each line."""
     lines = lines_of(joint.pattern)
-    spaces = [joint.pattern[b].x - joint.pattern[a].x for line in lines for a, b in zip(line, line[1:])]
+    spaces = [joint.pattern[b].x - joint.pattern[a].x for line in lines for a, b in pairwise(line)]
     room = min(spaces, default=math.inf) / paper.pt()
     ys = [joint.pattern[line[0]].y for line in lines]
-    if min((b - a for a, b in zip(ys, ys[1:])), default=math.inf) < paper.pt(2 * style.TINY):
+    if min((b - a for a, b in pairwise(ys)), default=math.inf) < paper.pt(2 * style.TINY):
         return ()
     if room >= joint.member.hole.along / 2 / paper.pt() + 4 + style.text_width(str(joint.n_bolts), style.TINY):
         return range(len(joint.pattern))
@@ -281,15 +119,16 @@ def _numbered(paper, joint):
 
 
 def _path(paper, path, cover):
+    # Only a plate can reach beyond what is drawn of it; clipping the member's lines would halve those along its edges.
+    within = cover if path.part == "plate" else None
     for k, piece in enumerate(path.pieces, start=1):
-        paper.fill(piece, style.SHADE, 2.6, gid=f"block-{k}")
+        paper.fill(piece, style.SHADE, 2.6, gid=f"block-{k}").set_clip_path(within)
     for line in path.spread:
-        paper.line(line, 0.8, style.PHANTOM, style.ACCENT, z=6.8)
+        paper.line(line, 0.9, style.PHANTOM, style.ACCENT, z=6.8, gid="spread", within=within)
     for line in path.torn:
-        paper.line(line, style.HEAVY, style.TORN if path.pieces else "-", style.ACCENT, z=6.9, gid="torn",
-                   within=None if path.pieces or path.part == "member" else cover)
+        paper.line(line, style.HEAVY, style.TORN if path.pieces else "-", style.ACCENT, z=6.9, gid="torn", within=within)
     for line in path.shear:
-        paper.line(line, style.HEAVY, "-", style.ACCENT, z=6.9, gid="sheared")
+        paper.line(line, style.HEAVY, "-", style.ACCENT, z=6.9, gid="sheared", within=within)
 
 
 def _fit(seen, left, right, below, above, widest, tallest):
@@ -306,10 +145,18 @@ def _chains(seen):
     ys = [joint.pattern[line[0]].y for line in lines_of(joint.pattern)]
     member, plate = [seen.lo, *ys, seen.hi], [seen.plate_lo, ys[0], ys[-1], seen.plate_hi]
     up = [(*grouped(member, 3), seen.end), ([seen.lo, seen.hi], None, seen.end)]
-    if seen.shown_lo == seen.plate_lo and seen.shown_hi == seen.plate_hi:
-        if abs(seen.plate_lo - seen.lo) > 1e-6 or abs(seen.plate_hi - seen.hi) > 1e-6:
-            up += [(sorted(set(plate)), None, seen.right), ([seen.plate_lo, seen.plate_hi], None, seen.right)]
+    whole = seen.shown_lo == seen.plate_lo and seen.shown_hi == seen.plate_hi
+    if whole and (abs(seen.plate_lo - seen.lo) > 1e-6 or abs(seen.plate_hi - seen.hi) > 1e-6):
+        up += [(sorted(set(plate)), None, seen.right), ([seen.plate_lo, seen.plate_hi], None, seen.right)]
     return grouped(along), up
+
+
+def shown_check(connection):
+    """Return the check an elevation shows: the governing one if it has a path, else the member's path with the largest ratio."""
+    if connection.governing.path is not None:
+        return connection.governing
+    drawn = [check for check in connection.checks if check.path is not None and check.kind == "strength"]
+    return next(iter(worst_first([check for check in drawn if check.part == "member"]) or worst_first(drawn)), None)
 
 
 def elevation_canvas(connection, check=None):
@@ -330,7 +177,7 @@ def elevation_canvas(connection, check=None):
     for _ in range(2):  # the texts that do not fit their space, and so the margins, depend on the scale
         scale = _fit(seen, left, right, below, above, style.TEXT_WIDTH, TALLEST)
         x0, x1 = seen.wide
-        paper_at = _Scale(scale)
+        paper_at = Drawing.measure(scale)
         rows = [paper_at.rows(stops, words) for stops, words, _ in up]
         right = sum(15 + 8 * (n - 1) for n in rows) + 8
         above = (40 if joint.length else 24) + 8 * (paper_at.rows(along, texts) - 1)
@@ -344,13 +191,6 @@ def elevation_canvas(connection, check=None):
     return figure
 
 
-class _Scale(Drawing):
-    """A Drawing before there is paper, for measuring."""
-
-    def __init__(self, scale):
-        self.scale = scale
-
-
 def _dimension(paper, seen, along, texts, up, rows):
     joint, pt = seen.joint, paper.pt
     level = seen.top + pt(13)
@@ -358,7 +198,7 @@ def _dimension(paper, seen, along, texts, up, rows):
     for k, stop in enumerate(along):
         if k == 0:
             skewed = joint.plate.end.slope != 0.0
-            starts.append(seen.axis if skewed else max(seen.shown_hi, seen.hi) if seen.shown_hi >= seen.hi else seen.shown_hi)
+            starts.append(seen.axis if skewed else seen.shown_hi)
         elif k == len(along) - 1:
             starts.append(seen.hi)
         else:
@@ -376,9 +216,7 @@ def _dimension(paper, seen, along, texts, up, rows):
         if k == 0:
             outer = {line_y: max(h.x + h.along / 2 for h in joint.pattern if abs(h.y - line_y) < 1e-5) + pt(7) for line_y in stops[1:-1]}
             begin = [start, *(outer[y] for y in stops[1:-1]), start]
-        elif k == 1:
-            begin = [x - pt(11)] * 2
-        elif k == 3:
+        elif k == 1 or k == 3:
             begin = [x - pt(11)] * 2
         elif k == 2:
             begin = [start if y in (seen.plate_lo, seen.plate_hi) else x - pt(11) for y in stops]
@@ -434,7 +272,7 @@ def _labels(paper, seen, connection, base):
         plate = f"2 {plate}, near one not shown"
     elif seen.shown_lo > seen.plate_lo or seen.shown_hi < seen.plate_hi:
         plate += ", broken off"
-    bolts = f"{joint.n_bolts} bolt{'s' if joint.n_bolts > 1 else ''} {_bolt_size(connection)}, {connection.bolt_group.product or connection.bolt_group.name}-{joint.bolts.threads}"
+    bolts = f"{joint.n_bolts} bolt{'s' if joint.n_bolts > 1 else ''} {bolt_text(connection)}"
     low = _pointed_at(joint)
     texts = [(seen.left, "left", joint.element.member), (None, "center", bolts), (seen.wide[1], "right", plate)]
     wide = [pt(style.text_width(text, style.TYPE)) for _, _, text in texts]
@@ -463,8 +301,15 @@ def _pointed_at(joint):
     return min(free, key=lambda bolt: (abs(bolt.x - (bolts[0].x + bolts[-1].x) / 2), bolt.x))
 
 
-def _bolt_size(connection):
-    return connection.size.name if connection.size.metric else fraction(connection.size.d)
+def bolt_size(connection):
+    """Return the size of the bolts, in fractions of an inch or as metric."""
+    return connection.size.name if connection.size.metric else fraction(connection.size.d, unit=" in")
+
+
+def bolt_text(connection):
+    """Return size, kind and threads of the bolts as a drawing calls them."""
+    group = connection.bolt_group
+    return f"{bolt_size(connection)} {group.product or group.name}-{connection.joint.bolts.threads}"
 
 
 def _force(connection):
@@ -474,6 +319,11 @@ def _force(connection):
     if demand.required_compression > 0:
         lines.append(f"(−{ceil_figures(demand.required_compression)} kip)")
     return lines
+
+
+def ratio(check):
+    """Return D/C as printed."""
+    return ratio_text(check.ratio) if math.isfinite(check.ratio) else "unlimited, no strength"
 
 
 def described(check):
@@ -507,76 +357,14 @@ def elevation(connection, check=None):
     joint, element = connection.joint, connection.joint.element
     seen_from = {"flange": " seen from the side of the " + ("stem" if element.joints == 1 else "web, one of two alike")}.get(element.name, "")
     caption = f"Elevation on the {element.name}{seen_from}, to scale; dimensions in inches."
-    alt = (f"Elevation of {element.member}, bolted by {len(joint.pattern)} bolts {_bolt_size(connection)} in {joint.n_lines} gage line"
-           f"{'s' if joint.n_lines > 1 else ''}, length {fraction(joint.length)} in, to a plate {fraction(connection.inputs.plate_thickness)} in thick "
-           f"and {fraction(connection.inputs.plate_width)} in wide.")
+    given, n, lines = connection.inputs, len(joint.pattern), joint.n_lines
+    alt = (f"Elevation of {element.member}, bolted by {n} bolt{'s' if n > 1 else ''} {bolt_size(connection)} in {lines} gage line"
+           f"{'s' if lines > 1 else ''}, length {fraction(joint.length)} in, to a plate {fraction(given.plate_thickness)} in thick and "
+           f"{fraction(given.plate_width)} in wide.")
     if check is not None and check.path is not None:
         what, styles = described(check)
         verb = "Shaded" if isinstance(check.path, Block) else "Heavy line"
         governs = ", which governs" if check.id == connection.governing.id else ""
-        caption += f" {verb}: {check.title[0].lower()}{check.title[1:]}, {what} (D/C {ratio_text(check.ratio)}{governs})." + (f" {styles}" if styles else "")
-        alt += f" Marked: {check.title}, {what}, D/C {ratio_text(check.ratio)}."
-    return style.Figure(svg, caption, alt, width)
-
-
-def path_checks(connection):
-    """Return the checks whose paths are drawn, in the order of PATHS."""
-    by_id = {check.id: check for check in connection.checks if check.path is not None and check.ratio is not None}
-    return [max((by_id[id] for id in ids if id in by_id), key=lambda check: check.ratio) for ids in PATHS if any(id in by_id for id in ids)]
-
-
-def paths_canvas(connection):
-    """Return the matplotlib Figure of the small elevations, one axes for each of ``path_checks``."""
-    checks = path_checks(connection)
-    joint = connection.joint
-    traces = [trace(joint, check) for check in checks]
-    views = [view(joint, path) for path in traces]
-    across = max(seen.wide[1] - seen.wide[0] for seen in views)
-    tall = max(seen.top - seen.bottom for seen in views)
-    gap, words, tallest = 0.2, 40, 2.0
-
-    def scale_for(columns):
-        rows = math.ceil(len(checks) / columns)
-        wide = (style.TEXT_WIDTH - gap * (columns - 1)) / columns
-        return min(wide / across, (min(tallest, 5.0 / rows) - words / 72) / tall, 0.3)
-
-    columns = max(range(2, max(3, min(len(checks), 3) + 1)), key=lambda n: (round(scale_for(n), 4), -n))
-    scale = scale_for(columns)
-    rows = math.ceil(len(checks) / columns)
-    cell = (style.TEXT_WIDTH - gap * (columns - 1)) / columns
-    height = tall * scale + (words + 14) / 72
-    figure = style.canvas(style.TEXT_WIDTH, rows * height)
-    for k, (check, path, seen) in enumerate(zip(checks, traces, views)):
-        row, column = divmod(k, columns)
-        in_row = min(columns, len(checks) - row * columns)
-        start = (style.TEXT_WIDTH - in_row * cell - (in_row - 1) * gap) / 2
-        place = (start + column * (cell + gap), (rows - 1 - row) * height, cell, height)
-        pt = 1 / 72 / scale
-        x0, x1 = seen.wide
-        middle = (x0 + x1) / 2
-        paper = Drawing(figure, place, (middle - cell / scale / 2, (seen.bottom + seen.top) / 2 - tall / 2 - words * pt), scale)
-        draw(paper, seen, path, numbers=False)
-        base = (seen.bottom + seen.top) / 2 - tall / 2 - 12 * pt
-        governs = check.id == connection.governing.id
-        colour = style.ACCENT if governs else style.INK
-        paper.text(middle, base, check.title, style.TYPE, "center", weight="bold" if governs else "normal", colour=colour)
-        paper.text(middle, base - 11 * pt, f"D/C {ratio_text(check.ratio)}{', governs' if governs else ''}", style.TYPE, "center", colour=colour)
-    return figure
-
-
-def paths(connection):
-    """Draw the governing path of every limit state that has one, as small elevations to one scale.
-
-    Returns
-    -------
-    figure : style.Figure.
-    """
-    checks = path_checks(connection)
-    with style.house():
-        drawn = paths_canvas(connection)
-        svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
-    listed = "; ".join(f"{check.title[0].lower()}{check.title[1:]}: {described(check)[0]}" for check in checks)
-    caption = ("Governing paths by limit state, all to one scale. Shaded: tear-out blocks, sheared along solid and torn along dashed lines; "
-               "heavy lines: chains of holes and the Whitmore width.")
-    alt = f"{len(checks)} small elevations. " + style.part_line(listed) + "."
+        caption += f" {verb}: {check.title[0].lower()}{check.title[1:]}, {what} (D/C {ratio(check)}{governs})." + (f" {styles}" if styles else "")
+        alt += f" Marked: {check.title}, {what}, D/C {ratio(check)}."
     return style.Figure(svg, caption, alt, width)

@@ -59,22 +59,6 @@ def text_width(text, size):
     return size * sum(_WIDTHS.get(sign, 0.66 if sign.isupper() else 0.47 if sign.isdigit() else 0.5) for sign in text)
 
 
-def wrapped(text, size, width):
-    """Return the lines in which a text fits a width. [pt]"""
-    lines = []
-    for word in text.split():
-        if lines and text_width(f"{lines[-1]} {word}", size) <= width:
-            lines[-1] += f" {word}"
-        else:
-            lines.append(word)
-    return lines
-
-
-def part_line(words):
-    """Return words with their first letter raised, as a caption begins."""
-    return words[:1].upper() + words[1:]
-
-
 class _Known(logging.Filter):
     """Lets every message pass but the one that the sheet's font is not installed to matplotlib, which is meant."""
 
@@ -121,3 +105,28 @@ def svg_text(figure):
 def fraction_of_text(figure):
     """Return the printed width of a matplotlib Figure as a fraction of the sheet's text width."""
     return round(min(figure.get_figwidth() / TEXT_WIDTH, 1.0), 4)
+
+
+def spread(wanted, apart, low, high):
+    """Return places as near as can be to those wanted, ascending, at least ``apart`` from each other, within low and high.
+
+    Where there is no room for all, they are spaced evenly from low to high.
+
+    >>> spread([1.0, 1.2, 5.0], 1.0, 0.0, 9.0)
+    [0.6, 1.6, 5.0]
+    """
+    if not wanted:
+        return []
+    if apart * (len(wanted) - 1) > high - low:
+        apart = (high - low) / (len(wanted) - 1)
+    runs = []  # of labels that touch: [first place, number of labels]
+    for place in wanted:
+        runs.append([min(max(place, low), high), 1])
+        while len(runs) > 1 and runs[-2][0] + runs[-2][1] * apart > runs[-1][0] + 1e-9:
+            start, n = runs.pop()
+            before, m = runs.pop()
+            first = (before * m + (start - m * apart) * n) / (m + n)
+            runs.append([first, m + n])
+        start, n = runs[-1]
+        runs[-1][0] = max(min(start, high - (n - 1) * apart), low)
+    return [round(start + k * apart, 9) for start, n in runs for k in range(n)]

@@ -109,6 +109,49 @@ def net_shear_area(A_gv, A_hv):
     return A_nv
 
 
+@formula("J4.3")
+def gross_tension_area(n_j, w, t):
+    """Gross area of the tension plane of a block, over like pieces.
+
+    Parameters
+    ----------
+    n_j : number of like pieces. []
+    w : width of the tension plane in one. [in]
+    t : thickness. [in]
+
+    Returns
+    -------
+    A_gt : gross area subject to tension. [in²]
+
+    >>> gross_tension_area.bare(2, 3.0, 0.5)
+    3.0
+    """
+    A_gt = n_j * w * t
+    return A_gt
+
+
+@formula("J4.3")
+def gross_tension_area_with_attached(n_j, w, t, A_a):
+    """Gross area of the tension plane of a block that tears with what hangs on it, over like pieces.
+
+    Parameters
+    ----------
+    n_j : number of like pieces. []
+    w : width of the tension plane in one. [in]
+    t : thickness. [in]
+    A_a : area of what hangs on the element and tears with it. [in²]
+
+    Returns
+    -------
+    A_gt : gross area subject to tension. [in²]
+
+    >>> gross_tension_area_with_attached.bare(1, 3.0, 0.5, 2.0)
+    3.5
+    """
+    A_gt = n_j * (w * t + A_a)
+    return A_gt
+
+
 @formula("J4.3, B4.3b")
 def tension_plane_holes(n_h, d_n, t):
     """Area lost to holes across the tension plane of a block.
@@ -173,6 +216,67 @@ def block_shear(F_u, A_nv, U_bs, A_nt, F_y, A_gv):
     R_nu = 0.60 * F_u * A_nv + U_bs * F_u * A_nt
     R_ny = 0.60 * F_y * A_gv + U_bs * F_u * A_nt
     R_n = min(R_nu, R_ny)
+    return R_n
+
+
+@formula("Eq. J4-1")
+def plate_yielding(F_y, A_g):
+    """Nominal strength of a connecting element in tension when its gross section yields.
+
+    Parameters
+    ----------
+    F_y : specified minimum yield stress. [ksi]
+    A_g : gross area. [in²]
+
+    Returns
+    -------
+    R_n : nominal strength. [kip]
+
+    >>> plate_yielding.bare(36.0, 2.0)
+    72.0
+    """
+    R_n = F_y * A_g
+    return R_n
+
+
+@formula("Eq. J4-2")
+def plate_rupture(F_u, A_e):
+    """Nominal strength of a connecting element in tension when its net section ruptures.
+
+    Parameters
+    ----------
+    F_u : specified minimum tensile strength. [ksi]
+    A_e : effective net area. [in²]
+
+    Returns
+    -------
+    R_n : nominal strength. [kip]
+
+    >>> plate_rupture.bare(58.0, 2.0)
+    116.0
+    """
+    R_n = F_u * A_e
+    return R_n
+
+
+@formula("Eq. J4-2, share of load")
+def plate_rupture_behind_lead_row(F_u, A_e, xi):
+    """Nominal strength, referred to the whole load, when a connecting element ruptures behind its lead row.
+
+    Parameters
+    ----------
+    F_u : specified minimum tensile strength. [ksi]
+    A_e : effective net area on the chain. [in²]
+    xi : share of the load left at the chain. []
+
+    Returns
+    -------
+    R_n : nominal strength. [kip]
+
+    >>> plate_rupture_behind_lead_row.bare(60.0, 2.0, 0.75)
+    160.0
+    """
+    R_n = F_u * A_e / xi
     return R_n
 
 

@@ -1,73 +1,22 @@
 """A bolted end of a tension member and its connection plates: inputs, the joint they describe, the checks that apply."""
 
 import math
-from typing import Literal
 
 import numpy as np
 
-from .. import units
-from ..check import not_applicable, strength_check
-from ..editions import CLAUSES
-from ..errors import InputError, ScopeError
-from ..facts import bolts as facts
-from ..facts import grades
-from ..geometry import End, Hole, centred_edge, closest_pair, grid, mirrored, outside, tightest_pair
-from . import bolt_group, details, gusset, net_section, tear_out
-from .base import CalcInputs, Connection
-from .element import element
-from .fields import Angle, Length, Lengths, Number, Points, note
-from .joint import Bolts, Gusset, Joint, Ply
-
-HoleKind = Literal["STD", "OVS", "SSL across", "SSL along", "LSL across", "LSL along"]
-
-_MEMBER, _PLATE, _PATTERN, _BOLTS, _GUSSET = "Member", "Connection plate", "Bolt pattern", "Bolts", "Gusset in compression"
-
-
-class BoltedInputs(CalcInputs):
-    """Inputs of a bolted tension connection."""
-
-    member: str = note("shape, or PL thickness x width", group=_MEMBER, min_length=1)
-    member_grade: str = note("steel of the member", group=_MEMBER, min_length=1)
-    connected_by: str | None = note("connected element: both flanges, web, flange, stem, long leg, short leg", None, group=_MEMBER)
-    member_length: Length | None = note("length for the advice on slenderness", None, group=_MEMBER, gt=0, le=24_000)
-    gap: Length | None = note("clear distance between the two angles (default: the plate's thickness)", None, group=_MEMBER, ge=0, le=12)
-    U_by_hand: Number | None = note("shear lag factor set by the engineer", None, group=_MEMBER, gt=0, le=1)
-    U_basis: str = note("written basis of U_by_hand", "", group=_MEMBER)
-
-    plates: Literal[1, 2] = note("connection plates at each bolt group: 1 (lap) or 2 (both sides)", 1, group=_PLATE)
-    plate_thickness: Length = note("thickness of one plate", group=_PLATE, gt=0, le=8)
-    plate_width: Length = note("width of the plate across the load", group=_PLATE, gt=0, le=200)
-    plate_grade: str = note("steel of the plate", group=_PLATE, min_length=1)
-    plate_end: Length = note("first row to the free edge of the plate, on the axis of the pattern", group=_PLATE, gt=0, le=60)
-    plate_edge_angle: Angle = note("angle between the load and the free edge of the plate", math.pi / 2, group=_PLATE, gt=0.5, lt=2.65)
-    plate_offset: Length = note("axis of the pattern off the centre line of the plate", 0.0, group=_PLATE, ge=-100, le=100)
-    filler_thickness: Length = note("fillers at one shear plane, total thickness", 0.0, group=_PLATE, ge=0, le=6)
-    fillers: int = note("number of fillers at one shear plane", 0, group=_PLATE, ge=0, le=4)
-
-    lines: int | None = note("gage lines", None, group=_PATTERN, ge=1, le=10)
-    rows: int | None = note("bolts in each line", None, group=_PATTERN, ge=1, le=40)
-    pitch: Length | None = note("spacing along the line", None, group=_PATTERN, le=24)
-    gage: Lengths = note("spacing of the lines: one for all, or one for each space", (), group=_PATTERN)
-    gage_from_back: Length | None = note("back of the leg, or outer face of the tee's flange, to the first line", None, group=_PATTERN, gt=0, le=60)
-    stagger: Length = note("shift of every second line along the load", 0.0, group=_PATTERN, ge=-24, le=24)
-    holes: Points = note("hole centres instead of lines and rows: x from the first row, y from the back or the lower edge", (), group=_PATTERN)
-    member_end: Length = note("last row to the end of the member", group=_PATTERN, gt=0, le=60)
-    other_leg_holes: Points = note("open holes in the outstanding leg: x from the first row, y from the back", (), group=_PATTERN)
-
-    bolt: str = note("bolt size", group=_BOLTS, min_length=1)
-    bolt_grade: str = note("bolt group or product", group=_BOLTS, min_length=1)
-    threads: Literal["N", "X"] = note("threads in (N) or out of (X) the shear plane", "N", group=_BOLTS)
-    installation: Literal["snug", "pretensioned", "slip-critical"] = note("snug, pretensioned or slip-critical", "snug", group=_BOLTS)
-    slip_class: Literal["A", "B"] | None = note("faying surface of a slip-critical joint", None, group=_BOLTS)
-    member_holes: HoleKind = note("holes of the member", "STD", group=_BOLTS)
-    plate_holes: HoleKind = note("holes of the plates", "STD", group=_BOLTS)
-    deformation_considered: bool = note("deformation at bolt holes at service load is a consideration", True, group=_BOLTS)
-    bare_weathering: bool = note("bare weathering steel outdoors", False, group=_BOLTS)
-
-    gusset_support: str | None = note(f"one of: {', '.join(gusset.K_CHOICES)}; or by hand", None, group=_GUSSET)
-    gusset_length: Length | None = note("last row to the support, along the load", None, group=_GUSSET, ge=0, le=240)
-    gusset_K: Number | None = note("effective length factor, with gusset_support = by hand", None, group=_GUSSET, gt=0, le=2.5)
-    gusset_K_basis: str = note("written basis of gusset_K", "", group=_GUSSET)
+from ... import units
+from ...check import not_applicable, strength_check
+from ...editions import CLAUSES
+from ...errors import InputError
+from ...facts import bolts as facts
+from ...facts import grades
+from ...geometry import End, Hole, centred_edge, grid, mirrored
+from .. import bolt_group, details, gusset, net_section, tear_out
+from ..base import Connection, Sweep, Table
+from ..element import element
+from ..joint import Bolts, Gusset, Joint, Ply
+from . import refusals
+from .inputs import BoltedInputs
 
 
 class BoltedConnection(Connection):
@@ -81,6 +30,7 @@ class BoltedConnection(Connection):
     family = "bolted"
     title = "Bolted tension connection"
     Model = BoltedInputs
+    parts = {"member": "Member", "bolts": "Bolts", "plate": "Connection plate", "detailing": "Spacing, edges, clearance"}
 
     def __init__(self, inputs, basis=None):
         super().__init__(inputs, basis)
@@ -89,91 +39,15 @@ class BoltedConnection(Connection):
         self.element = element(inputs.member, inputs.connected_by, inputs.plate_thickness if inputs.gap is None else inputs.gap)
         self.member_material = self._material(inputs.member_grade, inputs.member)
         self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
-        self._refuse_installation()
+        refusals.installation(self)
         self.joint = self._joint()
-        self._refuse_layout()
-
-    # What the inputs may not be
+        refusals.layout(self)
 
     def _material(self, grade, designation):
         if self.element.series != "PL":
             return grades.material(grade, form="shape", series=self.element.series, edition=self.basis.edition)
         form = "bar" if designation.strip().lower().startswith("bar") else "plate"
         return grades.material(grade, form=form, thickness=self.element.t, edition=self.basis.edition)
-
-    def _refuse_installation(self):
-        given, group = self.inputs, self.bolt_group
-        facts.size_notes(self.size, group)
-        if given.installation not in group.installation:
-            raise ScopeError(f"installation = {given.installation!r}: {group.product or group.name} may be {', '.join(group.installation)} only (J3.2)")
-        if (given.installation == "slip-critical") != (given.slip_class is not None):
-            raise InputError("slip_class is needed for a slip-critical joint: A or B" if given.slip_class is None else
-                             "slip_class is given but the joint is not slip-critical; remove it, or set installation = \"slip-critical\"")
-        clause = CLAUSES["holes"][self.basis.edition]
-        for name in ("member_holes", "plate_holes"):
-            kind = getattr(given, name)
-            if given.installation == "slip-critical":
-                continue
-            if kind == "OVS":
-                raise ScopeError(f"{name} = 'OVS': oversized holes are permitted in slip-critical joints only ({clause})")
-            if kind.endswith("along"):
-                raise ScopeError(f"{name} = {kind!r}: in a bearing joint a slot must lie across the load ({clause}); turn it or make the joint slip-critical")
-        long = [given.member_holes.startswith("LSL"), given.plate_holes.startswith("LSL")]
-        if sum(long) == 2 or long[1] and given.plates == 2 or long[0] and self.element.plies == 2:
-            raise ScopeError(f"long slots are permitted in one ply at a faying surface only ({clause})")
-        if given.gap is not None and self.element.plies != 2:
-            raise InputError(f"gap is for double angles; {self.element.member} is none")
-        if self.element.plies == 2 and given.plates == 2:
-            raise InputError("plates = 2: a double angle is bolted to one plate between its angles")
-        if given.gap is not None and given.gap < given.plate_thickness - 1e-9:
-            raise InputError(f"gap = {units.fraction(given.gap)} in is less than the plate's thickness of {units.fraction(given.plate_thickness)} in")
-        if given.U_by_hand is not None and len(given.U_basis.strip()) < 10:
-            raise InputError("U_by_hand needs a written basis in U_basis")
-        if (given.fillers == 0) != (given.filler_thickness == 0):
-            raise InputError("fillers and filler_thickness go together: give both or neither")
-
-    def _refuse_layout(self):
-        joint, d = self.joint, self.size.d
-        named = {"member": f"{self.element.member} {self.element.name}", "plate": "connection plate"}
-        for ply in (joint.member, joint.plate):
-            strip = [hole for hole in ply.holes if hole.y >= 0] if ply.name == "member" else list(ply.holes)
-            if out := outside(strip, ply.width, ply.end):
-                hole = strip[out[0]]
-                x = hole.x if ply.name == "member" else -hole.x
-                raise InputError(f"hole at x = {units.fraction(x)} in, y = {units.fraction(hole.y)} in is cut by an edge of the {named[ply.name]}, "
-                                 f"{units.fraction(ply.width)} in wide; move it or change the part")
-        pair = closest_pair(joint.pattern)
-        if pair and pair.spacing < 8 / 3 * d - 1e-9:
-            raise ScopeError(f"holes {units.printed(pair.spacing)} in apart: the minimum spacing is 2-2/3 d = {units.printed(8 / 3 * d)} in "
-                             f"({CLAUSES['minimum spacing'][self.basis.edition]})")
-        for ply in (joint.member, joint.plate):
-            tight = tightest_pair(ply.bolted)
-            if tight and tight.clear < d - 1e-9:
-                what = "overlap" if tight.clear <= 0 else f"are {units.printed(tight.clear)} in clear of each other"
-                raise ScopeError(f"holes of the {named[ply.name]} {what}: the clear distance may not be less than d = {units.fraction(d)} in "
-                                 f"({CLAUSES['minimum spacing'][self.basis.edition]})")
-        room = details.wrench_room(joint)
-        if room is not None:
-            try:
-                needed = facts.clearances(self.size).C_2
-            except LookupError:
-                needed = d
-            if room < needed - 1e-9:
-                raise InputError(f"bolt {self.size.name} is too big for the gage: {units.printed(room)} in to the face beside it, "
-                                 f"{units.printed(needed)} in are needed to enter it")
-        if joint.rows < 2 and self.element.eccentricity is not None and self.inputs.U_by_hand is None:
-            raise ScopeError("one bolt per line: Table D3.1 case 2 needs a connection length, so no U applies; use at least 2 rows, "
-                             "or set U_by_hand with its basis")
-        self._refuse_eccentricity()
-
-    def _refuse_eccentricity(self):
-        joint = self.joint
-        if self.element.offset is None:
-            return
-        centre = sum(hole.y for hole in joint.pattern) / len(joint.pattern)
-        if abs(centre - self.element.offset) > 1 / 32:
-            raise ScopeError(f"the bolt group's centroid is {units.printed(abs(centre - self.element.offset))} in off the member's centroid; "
-                             "J1.7 asks for them to coincide, eccentric groups are outside this calculation")
 
     # The joint that the inputs describe
 
@@ -288,11 +162,11 @@ class BoltedConnection(Connection):
             rows.append(("slip", "Slip", "bolts", slip, bolt_group.slip_factor(joint), False, bolt_group.slip))
         return [
             *rows,
-            ("plate yielding", "Plate, yielding of the gross section", "plate", "J4.1(a)", "yielding", True, gusset.gross_yielding),
-            ("plate rupture", "Plate, rupture of the net section", "plate", "J4.1(b)", "rupture", True,
-             lambda j: net_section.plate_rupture(j, j.plate)),
-            ("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "yielding", True, gusset.whitmore_yielding),
-            ("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "rupture", True, gusset.whitmore_rupture),
+            ("plate yielding", "Plate, yielding of the gross section", "plate", "J4.1(a)", "yielding", False, gusset.gross_yielding),
+            ("plate rupture", "Plate, rupture of the net section", "plate", "J4.1(b)", "rupture", False,
+             lambda j: net_section.plate_rupture(j.plate)),
+            ("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "yielding", False, gusset.whitmore_yielding),
+            ("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "rupture", False, gusset.whitmore_rupture),
             ("plate block", "Plate, block shear", "plate", "J4.3", "block shear", False,
              lambda j: tear_out.block_shear(j.plate, tear_out.plate_part(j))),
         ]
@@ -342,7 +216,7 @@ class BoltedConnection(Connection):
                  ("The bolts of a group share the load equally; strengths of bolts with their holes are summed.",
                   f"{CLAUSES['bolt shear'][self.basis.edition]}, User Note"),
                  ("No credit is taken for diagonals in the tension plane of a tear-out block.", "conservative"),
-                 ("Tension over a tear-out block is uniform, U_bs = 1.0.", "Commentary J4.3")]
+                 ("Tension over a tear-out block is uniform, $U_{bs}$ = 1.0.", "Commentary J4.3")]
         for material, part in ((self.member_material, "Member"), (self.plate_material, "Plate")):
             if material.note:
                 notes.append((f"{part} steel {material.name}: {material.note}", "availability, from memory"))
@@ -357,9 +231,9 @@ class BoltedConnection(Connection):
         return [*super().assumptions(), *notes]
 
     def materials_text(self):
-        """Return the steels with their strengths, in a sentence."""
+        """Return the steels with their strengths, in a sentence; symbols between dollar signs."""
         parts = ((f"member {self.element.member}", self.member_material), ("plate", self.plate_material))
-        return "; ".join(f"{part}: {m.name}, F_y {m.F_y:g} ksi, F_u {m.F_u:g} ksi" for part, m in parts)
+        return "; ".join(f"{part}: {m.name}, $F_y$ {m.F_y:g} ksi, $F_u$ {m.F_u:g} ksi" for part, m in parts)
 
     def by_others(self):
         """Return what the scope leaves to others."""
@@ -391,6 +265,62 @@ class BoltedConnection(Connection):
             return f"grip {units.printed(grip)} in; length by the supplier"
         return f"grip {units.printed(grip)} in; {units.fraction(math.ceil(least * 4 - 1e-9) / 4)} in with one washer (common practice)"
 
+    @property
+    def design(self):
+        """The joint as designed."""
+        return self.joint
+
+    @property
+    def subject(self):
+        """What the calculation is about."""
+        return self.element.member
+
+    def tables(self, part):
+        """Return the table of every bolt, beside the checks of the bolts."""
+        if part != "bolts":
+            return ()
+        found, joints = bolt_group.bolt_table(self.joint), self.element.joints
+        heads = ("Bolt", "x, in", "y, in", "member $l_c$, in", "bearing", "tearout", "plate $l_c$, in", "bearing", "tearout", "shear", "least")
+        rows = []
+        for row in found["rows"]:
+            sides = [(f"{_three(l_c)} {kind[0]}", _three(r_nb), _three(r_nt)) for l_c, kind, r_nb, r_nt in (row["member"], row["plate"])]
+            rows.append((str(row["bolt"]), units.fraction(row["x"]), units.fraction(row["y"]), *sides[0], *sides[1], _three(row["shear"]),
+                         units.floor_figures(row["least"])))
+        caption = (f"Nominal strengths in kip for one bolt group{f' of {joints}' if joints > 1 else ''}; "
+                   "e: towards the edge of the part, h: towards the next hole.")
+        sums = {side: units.floor_figures(value, 4) for side, value in found["sums"].items()}
+        remark = (f"Sums over {'all groups' if joints > 1 else 'the group'}, nominal: with the member's holes {sums['member']} kip, with the plate's "
+                  f"holes {sums['plate']} kip; each bolt limited by the weaker ply {sums['stricter']} kip (a stricter reading, for information).")
+        return (Table("Every bolt", heads, tuple(rows), caption, remark),)
+
+    def drawings(self):
+        """Return the elevation with the governing path, the cross-section, and the paths of the other limit states."""
+        from ...figures import cross_section, elevation, paths
+
+        return tuple(figure for figure in (elevation(self), cross_section(self), paths(self)) if figure is not None)
+
+    def sweep(self):
+        """Return the sweep over rows of bolts at the chosen pitch, with the design's rows at other pitches beside it."""
+        given = self.inputs
+        if given.holes:
+            return "Not drawn: the holes are given one by one, so there is no pitch at which rows could be added."
+        pitch, stagger = given.pitch or 3.0, abs(given.stagger) * (given.lines > 1)
+        first = 1 if self.element.eccentricity is None or given.U_by_hand is not None else 2
+        rows = list(range(first, max(given.rows + 4, 8) + 1))
+        stretched = None
+        if given.rows > 1:
+            thinner = min(self.joint.member.t, self.joint.plate.t)
+            pitches = np.linspace(8 / 3 * self.size.d, max(pitch, min(24 * thinner, details.S_CAP, 2 * pitch)), 200)
+            stretched = ((given.rows - 1) * pitches + stagger, self.at(pitch=pitches))
+        lengths = np.array([(n - 1) * pitch + stagger for n in rows])
+
+        def describe(i):
+            at = f" at {units.fraction(pitch)} in" if rows[i] > 1 else ""
+            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, l = {units.fraction(lengths[i])} in"
+
+        return Sweep(lengths, [self.at(rows=n, pitch=pitch) for n in rows], rows.index(given.rows), describe, stretched,
+                     f"{given.rows} rows at other pitches", marks=tuple(f"{n} rows" for n in rows))
+
     def at(self, rows=None, pitch=None):
         """Return the joint with another number of rows or another pitch (which may be an array), unvalidated, for a sweep."""
         return self._joint(rows, pitch)
@@ -410,3 +340,10 @@ def _most(values):
     values = list(values)
     return np.maximum.reduce(values) if any(isinstance(value, np.ndarray) for value in values) else max(values)
 
+
+
+def _three(value):
+    return units.printed(value, 3)
+
+
+CONNECTION = BoltedConnection

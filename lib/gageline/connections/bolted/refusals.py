@@ -1,0 +1,87 @@
+"""What a bolted connection may not be: each refusal one sentence that names the clause and its limit."""
+
+from ... import units
+from ...editions import CLAUSES
+from ...errors import InputError, ScopeError
+from ...facts import bolts as facts
+from ...geometry import closest_pair, outside, tightest_pair
+from .. import details
+
+
+def installation(c):
+    """Refuse bolts, holes, plates and fillers that no provision covers together."""
+    given, group = c.inputs, c.bolt_group
+    facts.size_notes(c.size, group)
+    if given.installation not in group.installation:
+        raise ScopeError(f"installation = {given.installation!r}: {group.product or group.name} may be {', '.join(group.installation)} only (J3.2)")
+    if (given.installation == "slip-critical") != (given.slip_class is not None):
+        raise InputError("slip_class is needed for a slip-critical joint: A or B" if given.slip_class is None else
+                         "slip_class is given but the joint is not slip-critical; remove it, or set installation = \"slip-critical\"")
+    clause = CLAUSES["holes"][c.basis.edition]
+    for name in ("member_holes", "plate_holes"):
+        kind = getattr(given, name)
+        if given.installation == "slip-critical":
+            continue
+        if kind == "OVS":
+            raise ScopeError(f"{name} = 'OVS': oversized holes are permitted in slip-critical joints only ({clause})")
+        if kind.endswith("along"):
+            raise ScopeError(f"{name} = {kind!r}: in a bearing joint a slot must lie across the load ({clause}); turn it or make the joint slip-critical")
+    long = [given.member_holes.startswith("LSL"), given.plate_holes.startswith("LSL")]
+    if sum(long) == 2 or (long[1] and given.plates == 2) or (long[0] and c.element.plies == 2):
+        raise ScopeError(f"long slots are permitted in one ply at a faying surface only ({clause})")
+    if given.gap is not None and c.element.plies != 2:
+        raise InputError(f"gap is for double angles; {c.element.member} is none")
+    if c.element.plies == 2 and given.plates == 2:
+        raise InputError("plates = 2: a double angle is bolted to one plate between its angles")
+    if given.gap is not None and given.gap < given.plate_thickness - 1e-9:
+        raise InputError(f"gap = {units.fraction(given.gap)} in is less than the plate's thickness of {units.fraction(given.plate_thickness)} in")
+    if given.U_by_hand is not None and len(given.U_basis.strip()) < 10:
+        raise InputError("U_by_hand needs a written basis in U_basis")
+    if (given.fillers == 0) != (given.filler_thickness == 0):
+        raise InputError("fillers and filler_thickness go together: give both or neither")
+
+
+def layout(c):
+    """Refuse holes that do not fit the parts, each other, or the wrench, and groups off the member's centroid."""
+    joint, d = c.joint, c.size.d
+    named = {"member": f"{c.element.member} {c.element.name}", "plate": "connection plate"}
+    for ply in (joint.member, joint.plate):
+        strip = [hole for hole in ply.holes if hole.y >= 0] if ply.name == "member" else list(ply.holes)
+        if out := outside(strip, ply.width, ply.end):
+            hole = strip[out[0]]
+            x = hole.x if ply.name == "member" else -hole.x
+            raise InputError(f"hole at x = {units.fraction(x)} in, y = {units.fraction(hole.y)} in is cut by an edge of the {named[ply.name]}, "
+                             f"{units.fraction(ply.width)} in wide; move it or change the part")
+    pair = closest_pair(joint.pattern)
+    if pair and pair.spacing < 8 / 3 * d - 1e-9:
+        raise ScopeError(f"holes {units.printed(pair.spacing)} in apart: the minimum spacing is 2-2/3 d = {units.printed(8 / 3 * d)} in "
+                         f"({CLAUSES['minimum spacing'][c.basis.edition]})")
+    for ply in (joint.member, joint.plate):
+        tight = tightest_pair(ply.bolted)
+        if tight and tight.clear < d - 1e-9:
+            what = "overlap" if tight.clear <= 0 else f"are {units.printed(tight.clear)} in clear of each other"
+            raise ScopeError(f"holes of the {named[ply.name]} {what}: the clear distance may not be less than d = {units.fraction(d)} in "
+                             f"({CLAUSES['minimum spacing'][c.basis.edition]})")
+    room = details.wrench_room(joint)
+    if room is not None:
+        try:
+            needed = facts.clearances(c.size).C_2
+        except LookupError:
+            needed = d
+        if room < needed - 1e-9:
+            raise InputError(f"bolt {c.size.name} is too big for the gage: {units.printed(room)} in to the face beside it, "
+                             f"{units.printed(needed)} in are needed to enter it")
+    if joint.rows < 2 and c.element.eccentricity is not None and c.inputs.U_by_hand is None:
+        raise ScopeError("one bolt per line: Table D3.1 case 2 needs a connection length, so no U applies; use at least 2 rows, "
+                         "or set U_by_hand with its basis")
+    _eccentricity(c)
+
+
+def _eccentricity(c):
+    joint = c.joint
+    if c.element.offset is None:
+        return
+    centre = sum(hole.y for hole in joint.pattern) / len(joint.pattern)
+    if abs(centre - c.element.offset) > 1 / 32:
+        raise ScopeError(f"the bolt group's centroid is {units.printed(abs(centre - c.element.offset))} in off the member's centroid; "
+                         "J1.7 asks for them to coincide, eccentric groups are outside this calculation")
