@@ -3,11 +3,10 @@
 import base64
 import html
 
-_STYLE = ("<style>.gl{max-width:60em;font-family:Georgia,'Libertinus Serif',serif;line-height:1.4}.gl table{border-collapse:collapse;margin:.6em 0;"
-          "border-top:1.5px solid;border-bottom:1.5px solid}.gl th{border-bottom:1px solid;font-weight:600}.gl td,.gl th{padding:.15em .6em;"
-          "text-align:left;vertical-align:top;background:none}.gl .r{text-align:right}.gl .c{text-align:center}.gl .eq{display:flex;"
-          "justify-content:space-between;align-items:center;gap:1em}.gl .cl,.gl .cap,.gl .note{color:#555;font-size:.88em}.gl img{max-width:100%;"
-          "background:#fff}.gl .v{display:flex;justify-content:space-between;margin:.3em 0 1em 1.2em}</style>")
+# JupyterLab drops style sheets of notebooks it does not trust yet and sets tables right-aligned; inline styles survive.
+_LEFT = ' style="text-align:left;vertical-align:top"'
+_ALIGN = {"left": _LEFT, "right": ' style="text-align:right;vertical-align:top"', "center": ' style="text-align:center;vertical-align:top"'}
+_SMALL = ' style="color:#555;font-size:.88em"'
 
 
 def to_html(blocks):
@@ -17,7 +16,7 @@ def to_html(blocks):
     ----------
     blocks : list of blocks of ``sheet.blocks``.
     """
-    return f'{_STYLE}<div class="gl">' + "".join(_KINDS[block["kind"]](block) for block in blocks if block["kind"] in _KINDS) + "</div>"
+    return '<div style="max-width:60em">' + "".join(_KINDS[block["kind"]](block) for block in blocks if block["kind"] in _KINDS) + "</div>"
 
 
 def _runs(runs):
@@ -40,7 +39,7 @@ def _list(title, rows):
 
 
 def _cover(block):
-    rows = "".join(f"<tr><td>{_runs(key)}</td><td>{_runs(value)}</td></tr>" for key, value in block["criteria"])
+    rows = "".join(f"<tr><td{_LEFT}>{_runs(key)}</td><td{_LEFT}>{_runs(value)}</td></tr>" for key, value in block["criteria"])
     taken = [[f"{a if isinstance(a, str) else a[0]}: ", *([t] if isinstance(t, str) else t), " (", *([b] if isinstance(b, str) else b), ")"]
              for a, t, b, _ in block["assumptions"]]
     return (f"<h2>{html.escape(block['title'])}</h2><p>{_runs(block['purpose'])}</p><p><b>{_runs(block['governing'])}</b></p>"
@@ -49,46 +48,46 @@ def _cover(block):
 
 
 def _table(block):
-    align = [{"right": ' class="r"', "center": ' class="c"'}.get(column["align"], "") for column in block["columns"]]
+    align = [_ALIGN[column["align"]] for column in block["columns"]]
     head = "".join(f"<th{a}>{_runs(column['head'])}</th>" for a, column in zip(align, block["columns"]))
     body = ""
     for row in block["rows"]:
         cells = [f"<td{a}>{'<b>' if row['strong'] else ''}{_runs(cell)}{'</b>' if row['strong'] else ''}</td>" for a, cell in zip(align, row["cells"])]
         if row["span_reason"]:
             start, reason = row["span_reason"]
-            cells.append(f'<td colspan="{len(align) - start}">{_runs(reason)}</td>')
+            cells.append(f'<td colspan="{len(align) - start}"{_LEFT}>{_runs(reason)}</td>')
         body += f"<tr>{''.join(cells)}</tr>"
-    caption = f'<p class="cap">{_runs(block["caption"])}</p>' if any(block["caption"]) else ""
+    caption = f'<p{_SMALL}>{_runs(block["caption"])}</p>' if any(block["caption"]) else ""
     return f"<table><thead><tr>{head}</tr></thead><tbody>{body}</tbody></table>{caption}"
 
 
 def _equation(block):
-    rows = " \\\\ ".join(line["lhs"] + " &= " + r" \\ &= ".join(line["rows"]) for line in block["lines"])
-    return (f'<div class="eq" role="math" aria-label="{html.escape(block["alt"], quote=True)}"><div>\\(\\begin{{aligned}}{rows}\\end{{aligned}}\\)</div>'
-            f'<div class="cl">{html.escape(block["clause"])}</div></div>')
+    rows = " \\\\ ".join(line["lhs"] + " &= " + r" \\ &= ".join([*line["rows"][:-2], " = ".join(line["rows"][-2:])]) for line in block["lines"])
+    return (f'<div style="display:flex;justify-content:space-between;align-items:center" role="math" aria-label="{html.escape(block["alt"], quote=True)}"><div>\\(\\begin{{aligned}}{rows}\\end{{aligned}}\\)</div>'
+            f'<div{_SMALL}>{html.escape(block["clause"])}</div></div>')
 
 
 def _verdict(block):
     said = {True: "OK", False: "N.G.", None: ""}[block["ok"]]
     quotient = f"{html.escape(block['text'])} = " if block["text"] else ""
-    return f'<div class="v"><span>{_runs(block["lhs"])} &emsp; D/C = {quotient}<b>{html.escape(block["ratio_text"])}</b></span><b>{said}</b></div>'
+    return f'<div style="display:flex;justify-content:space-between;margin:.3em 0 1em"><span>{_runs(block["lhs"])} &emsp; D/C = {quotient}<b>{html.escape(block["ratio_text"])}</b></span><b>{said}</b></div>'
 
 
 def _figure(block):
     data = base64.b64encode(block["svg"].encode()).decode()
     return (f'<p><img style="width:{100 * block["width"]:.0f}%" alt="{html.escape(block["alt"], quote=True)}" src="data:image/svg+xml;base64,{data}"></p>'
-            f'<p class="cap">{_runs(block["caption"])}</p>')
+            f'<p{_SMALL}>{_runs(block["caption"])}</p>')
 
 
 def _rows(rows):
-    return "<table>" + "".join("<tr>" + "".join(f"<td>{_runs(cell)}</td>" for cell in row) + "</tr>" for row in rows) + "</table>"
+    return "<table>" + "".join("<tr>" + "".join(f"<td{_LEFT}>{_runs(cell)}</td>" for cell in row) + "</tr>" for row in rows) + "</table>"
 
 
 _KINDS = {
     "cover": _cover,
     "heading": lambda b: f"<h{b['level'] + 1}>{_runs(b['text'])}</h{b['level'] + 1}>",
     "prose": lambda b: f"<p>{_runs(b['runs'])}</p>",
-    "note": lambda b: f'<p class="note">{_runs(b["runs"])}</p>',
+    "note": lambda b: f'<p{_SMALL}>{_runs(b["runs"])}</p>',
     "pairs": lambda b: _rows(b["rows"]),
     "table": _table,
     "equation": _equation,
