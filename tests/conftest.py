@@ -7,7 +7,7 @@ sys.path.insert(0, str(Path(__file__).parent))
 
 
 def pytest_terminal_summary(terminalreporter):
-    runner = next((module for name, module in sys.modules.items() if name.endswith("test_published")), None)
+    runner = sys.modules.get("tests.published.test_published")
     if runner is not None and runner.DEVIATIONS:
         terminalreporter.write_sep("-", "published cases")
         for line in runner.summary():

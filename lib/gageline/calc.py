@@ -5,8 +5,9 @@ Each part is an object the notebook displays: blocks for the sheet (``sheet.bloc
 
 import html
 import json
+from functools import cached_property
 
-from . import cells, families, identity, presenting, project, study
+from . import cells, families, identity, presenting, project, signoffs, store, study
 from .errors import InputError
 from .loads import Demands
 from .sheet import blocks as sheet
@@ -45,8 +46,9 @@ def begin(family):
         shell = None
     if shell is None:
         raise InputError("begin() is for notebooks; in a script build the connection directly, for example gageline.bolted(...)")
-    # The cell that calls begin() is the last one entered.
-    given = cells.inputs_of_session(shell.user_ns["In"][:-1])
+    # The cell that calls begin() is the last one entered; a runner that stores no history leaves the list at its first, empty entry.
+    entered = shell.user_ns["In"]
+    given = cells.inputs_of_session(entered[:-1]) if len(entered) > 1 else cells.inputs_of_namespace(shell.user_ns)
     made = Calc(family, given, project.find())
     shell.set_custom_exc((Exception,), _one_sentence)
     return made
@@ -81,13 +83,45 @@ class Calc:
         """Return the results as plain data, the same that is attached to the PDF."""
         return self.connection.to_dict()
 
-    def open_items(self):
-        """Return the open items: the engineer's, failed checks, and inputs without a source."""
+    @cached_property
+    def content(self):
+        """The hash that sign-offs hold for: inputs with their sources, basis and results."""
+        return signoffs.content_hash(self.given, self.project.basis, self.results())
+
+    @cached_property
+    def log(self):
+        """The sign-offs, comments and settled items of this mark, as they stood when they were first asked for."""
+        return signoffs.read(self.project_path.parent, self.connection.inputs.mark)
+
+    def register(self):
+        """Return the assumptions and open items as dicts: id, kind, text, basis, status, and whether a sign-off may settle it."""
+        settled, rows = self.log.settled(), []
+        asked = self.connection.inputs.open_items
         unsourced = [name for name in self.given if not self.sources[name] and name not in presenting.NEEDS_NO_SOURCE]
-        extra = [f"Inputs without a source: {', '.join(unsourced)}."] if unsourced else []
         overridden = [name for name, source in self.sources.items() if source == cells.OVERRIDE]
-        extra += [f"Inputs overridden at the run: {', '.join(overridden)}."] if overridden else []
-        return [*self.connection.open_items(), *extra]
+        items = [("assumption", text, basis, True) for text, basis in self.connection.assumptions()]
+        items += [("open item", text, "engineer" if text in asked else "a check of this calculation", not text.endswith(presenting.FAILED))
+                  for text in self.connection.open_items()]
+        items += [("open item", f"Inputs without a source: {', '.join(unsourced)}.", "inputs", False)] if unsourced else []
+        items += [("open item", f"Inputs overridden at the run: {', '.join(overridden)}.", "inputs", False)] if overridden else []
+        counts = {"assumption": 0, "open item": 0}
+        for kind, text, basis, may in items:
+            counts[kind] += 1
+            done = settled.get(text) if may else None
+            status = {"assumption": "stated", "open item": "open"}[kind]
+            if done:
+                status = f"{'confirmed' if kind == 'assumption' else 'closed'} {done['when'][:10]} by {done['who']}: {done['basis']}"
+            rows.append({"id": f"{kind[0].upper()}{counts[kind]}", "kind": kind, "text": text, "basis": basis, "status": status, "may": may,
+                         "open": kind == "open item" and not done})
+        return rows
+
+    def open_items(self):
+        """Return what is open, as sentences: the engineer's items, failed checks, inputs without a source, comments, voided sign-offs."""
+        open_now = [row["text"] for row in self.register() if row["open"]]
+        comments = [f"Comment {each['id']} on {each['on']} ({each['who']}): {each['text']}" for each in self.log.open_comments()]
+        void = [f"Sign-off of {each['when'][:10]} by {each['who']} ({each['role']}) is void: inputs or results have changed since."
+                for each in self.log.voided(self.content)]
+        return [*open_now, *comments, *void, *(f"Sign-off log: {fault}." for fault in self.log.faults)]
 
     def cover(self):
         """Return the cover: title block data, criteria, scope, assumptions, open items, what governs."""
@@ -102,10 +136,31 @@ class Calc:
                      "description": said} for name, (data, said) in files.items()]
         attached.append({"name": project.FILE, "mime": "application/toml", "text": self.project_path.read_text(encoding="utf-8"),
                          "description": "The project's control data"})
+        if self.log.events:
+            attached.append({"name": "signoffs.json", "mime": "application/json", "text": store.canonical(list(self.log.events)).decode(),
+                             "description": "Sign-offs, comments and settled items"})
+        # Only an issue carries the status it is entitled to.
+        status = job.status.upper() + ("" if job.status == "preliminary" else ", NOT ISSUED")
         return sheet.meta(project=job.project, client=job.client, location=job.location, job=job.job, mark=who.mark,
-                          title=who.title or self.connection.title, rev=job.rev, rev_date=job.date.isoformat(), by=job.prepared_by,
-                          by_date=job.date.isoformat(), status=job.status.upper(), firm=job.firm, edition=job.basis.specification,
+                          title=who.title or self.connection.title, rev=job.rev, rev_date=job.date.isoformat(),
+                          **self.signed(), status=status, firm=job.firm, logo=self._logo(), edition=job.basis.specification,
                           method=job.method, loads=job.basis.loads_standard, paper=job.paper, attachments=attached)
+
+    def signed(self):
+        """Return the title block's names and dates, from recorded sign-offs of this content and from nothing else."""
+        out = {}
+        for role, field in (("preparer", "by"), ("checker", "checked"), ("approver", "approved")):
+            event = self.log.sign_off(role, self.content)
+            out |= {field: event["who"] if event else "", f"{field}_date": event["when"][:10] if event else ""}
+        return out
+
+    def _logo(self):
+        if not self.project.logo:
+            return ""
+        path = self.project_path.parent / self.project.logo
+        if path.parent != self.project_path.parent or path.suffix != ".svg" or not path.is_file():
+            raise InputError(f"{self.project_path}: logo = {self.project.logo!r} is no SVG file beside the project file")
+        return path.read_text(encoding="utf-8")
 
     def summary(self):
         """Return the summary: the governing check first, then every check by its ratio, then those that do not apply."""
@@ -154,8 +209,8 @@ class Calc:
         return Part([*presenting.permissible(self.connection), *([presenting.figure(drawn)] if drawn else [])])
 
     def closing(self):
-        """Return notation, references, cautions and the identification of the program."""
-        return Part([*presenting.closing(self.connection), sheet.heading(text="Program identification"),
+        """Return the review, notation, references, cautions and the identification of the program."""
+        return Part([*presenting.review(self), *presenting.closing(self.connection), sheet.heading(text="Program identification"),
                      sheet.identification(rows=identity.rows(self.connection.family))])
 
     def _repr_html_(self):

@@ -101,6 +101,12 @@ def inputs_of_session(executed):
     return given
 
 
+def inputs_of_namespace(names):
+    """Return name -> Given from a session's variables, for a kernel that keeps no history; where they come from is not known then."""
+    plain = (str, int, float, bool, list, tuple)
+    return {name: Given(value, "") for name, value in names.items() if not name.startswith("_") and name not in ("In", "Out") and type(value) in plain}
+
+
 def injected_cell(overrides):
     """Return the source of a cell that overrides inputs, as papermill writes it."""
     return "# Parameters\n" + "".join(f"{name} = {value!r}\n" for name, value in overrides.items())

@@ -13,12 +13,20 @@ FACTORS = {
     "rupture": (0.75, 2.00),
     "bolts": (0.75, 2.00),
     "block shear": (0.75, 2.00),
+    "weld": (0.75, 2.00),
     "slip, standard holes or short slots across": (1.00, 1.50),
     "slip, oversized holes or short slots along": (0.85, 1.76),
     "slip, long slots": (0.70, 2.14),
     "compression": (0.90, 1.67),
+    "shear yielding": (1.00, 1.50),
+    "shear rupture": (0.75, 2.00),
+    "web local yielding": (1.00, 1.50),
+    "bending": (0.90, 1.67),
+    "contact bearing": (0.75, 2.00),
+    "interaction, factors within": (1.00, 1.00),
+    "web crippling": (0.75, 2.00),
 }
-"""Limit state -> (phi, Omega), as printed in the Specification: [AISC360] D2, J3, J4, E1. The only place they stand."""
+"""Limit state -> (phi, Omega), as printed in the Specification: [AISC360] D2, D5, E1, F1, J3, J4, J7. The only place they stand."""
 
 METHODS = ("LRFD", "ASD")
 
@@ -108,7 +116,7 @@ class Check:
         """Demand over available strength, or required over provided; None where the check does not apply."""
         if not self.applies or self.demand is None:
             return None
-        return self.demand / self.available if self.available else float("inf")
+        return self.demand / self.available if self.available > 0 else float("inf")
 
     @property
     def ok(self):

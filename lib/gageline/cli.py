@@ -6,7 +6,7 @@ from typing import Annotated
 
 import typer
 
-from . import __version__
+from . import __version__, archive_cli, schedule_cli
 from .errors import GagelineError
 
 app = typer.Typer(add_completion=False, no_args_is_help=True, pretty_exceptions_enable=False, rich_markup_mode=None,
@@ -44,7 +44,7 @@ def report(notebook: Notebook, set_: Set = [], out: Annotated[Path | None, typer
     """Run one calculation and make its PDF."""
     from . import running
 
-    say, done = _progress()
+    say, done = progress()
     try:
         path, calc = running.report(notebook, overrides(set_), out, save, say)
     finally:
@@ -72,7 +72,7 @@ def demo(folder: Annotated[Path, typer.Argument(help="where to build the demonst
     from .starting import demonstration
 
     for notebook in demonstration(folder):
-        say, done = _progress()
+        say, done = progress()
         try:
             path, calc = running.report(notebook, say=say)
         finally:
@@ -95,7 +95,7 @@ def inputs(family: Annotated[str, typer.Argument(help="family of connection")] =
             table.add_row(f"[bold]{group}[/bold]")
         default = "compulsory" if field.is_required() else "" if field.default in (None, (), "") else str(field.default)
         table.add_row(name, field.description, default)
-    _console().print(table)
+    console().print(table)
 
 
 @app.command()
@@ -108,6 +108,10 @@ def shapes(like: Annotated[str, typer.Argument(help="a series (WT) or the beginn
     if not found:
         tables.shape(like)
     typer.echo("\n".join(found))
+
+
+archive_cli.add_to(app)
+app.command()(schedule_cli.schedule)
 
 
 def overrides(pairs):
@@ -128,7 +132,7 @@ def overrides(pairs):
     return out
 
 
-def _progress():
+def progress():
     """Return (say, done) of a one-line progress display on a terminal's stderr; silent elsewhere."""
     if not sys.stderr.isatty():
         return (lambda text: None), (lambda: None)
@@ -159,10 +163,11 @@ def _print_summary(connection):
     for each in connection.checks:
         if not each.applies:
             table.add_row(each.title, each.clause, "", "", "–", each.reason, style="dim")
-    _console().print(table)
+    console().print(table)
 
 
-def _console():
+def console():
+    """Return the terminal to print tables on; 140 columns wide where it is none."""
     from rich.console import Console
 
     return Console(width=None if sys.stdout.isatty() else 140)
@@ -172,7 +177,9 @@ def main():
     """Run the command line; errors of ours are one sentence on stderr and exit code 1."""
     debug = "--debug" in sys.argv
     try:
-        app(standalone_mode=False)
+        # typer turns a Ctrl-C into an exit code, which without its standalone mode is what it returns.
+        if app(standalone_mode=False) == 130:
+            raise KeyboardInterrupt
     except GagelineError as error:
         if debug:
             raise

@@ -36,6 +36,8 @@ class Basis:
 CLAUSES = {
     "bolt shear": {"360-16": "J3.6", "360-22": "J3.7"},
     "bearing and tearout": {"360-16": "J3.10", "360-22": "J3.11"},
+    "combined tension and shear": {"360-16": "J3.7", "360-22": "J3.8"},
+    "slip with tension": {"360-16": "J3.9", "360-22": "J3.10"},
     "slip": {"360-16": "J3.8", "360-22": "J3.9"},
     "minimum spacing": {"360-16": "J3.3", "360-22": "J3.4"},
     "minimum edge distance": {"360-16": "J3.4", "360-22": "J3.5"},

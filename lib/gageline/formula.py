@@ -20,7 +20,7 @@ FORMULAS = {}
 """Every formula of the package by qualified name, in order of definition; contract tests run over it."""
 
 EDITIONS = ("360-22", "360-16")
-_CALLS = ("min", "max", "sqrt", "tan")
+_CALLS = ("min", "max", "sqrt", "sin", "cos", "tan", "acos")
 _NODES = (ast.Expression, ast.BinOp, ast.UnaryOp, ast.Name, ast.Constant, ast.Call, ast.Load, ast.Add, ast.Sub, ast.Mult, ast.Div,
           ast.Pow, ast.USub)
 
@@ -49,6 +49,22 @@ def _root(value):
     return value**0.5
 
 
+def _sine(value):
+    if _array((value,)):
+        import numpy
+
+        return numpy.sin(value)
+    return math.sin(value)
+
+
+def _cosine(value):
+    if _array((value,)):
+        import numpy
+
+        return numpy.cos(value)
+    return math.cos(value)
+
+
 def _tangent(value):
     if _array((value,)):
         import numpy
@@ -57,7 +73,16 @@ def _tangent(value):
     return math.tan(value)
 
 
-_NAMESPACE = {"min": _least, "max": _greatest, "sqrt": _root, "tan": _tangent, "pi": math.pi, "__builtins__": {}}
+def _arc_cosine(value):
+    if _array((value,)):
+        import numpy
+
+        return numpy.arccos(value)
+    return math.acos(value)
+
+
+_NAMESPACE = {"min": _least, "max": _greatest, "sqrt": _root, "sin": _sine, "cos": _cosine, "tan": _tangent, "acos": _arc_cosine,
+              "pi": math.pi, "__builtins__": {}}
 
 
 @dataclass(frozen=True)
@@ -167,7 +192,10 @@ class Formula:
 
         if len(quantities) != len(self.arguments):
             raise FormulaError(f"{self.__name__}: takes {', '.join(self.arguments)}")
-        scope = dict(_NAMESPACE, tan=lambda angle: math.tan(angle.to("radian").magnitude))
+        scope = dict(_NAMESPACE, sin=lambda angle: math.sin(angle.to("radian").magnitude),
+                     cos=lambda angle: math.cos(angle.to("radian").magnitude),
+                     tan=lambda angle: math.tan(angle.to("radian").magnitude),
+                     acos=lambda ratio: units.quantity(math.acos(ratio.to("").magnitude), "rad"))
         for name, given in zip(self.arguments, quantities):
             unit = SYMBOLS[name].unit
             given = given if isinstance(given, pint.Quantity) else units.quantity(given, "")

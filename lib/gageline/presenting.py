@@ -9,10 +9,14 @@ from .loads import Demands
 from .loads import permissible as permissible_load
 from .render import value_latex
 from .sheet import blocks as sheet
+from .signoffs import HEADINGS, ROLES
 from .symbols import SYMBOLS
 
-NEEDS_NO_SOURCE = ("mark", "title", "purpose", "assumptions", "open_items", "U_basis", "gusset_K_basis")
+NEEDS_NO_SOURCE = ("mark", "title", "purpose", "assumptions", "open_items", "U_basis", "gusset_K_basis", "p_basis", "p_beam_basis", "pin_shear_basis")
 """Inputs that are words about the calculation, not facts about the job."""
+
+FAILED = "D/C above 1.00."
+"""How an open item of a failed check ends; nobody can settle it."""
 
 CAUTIONS = (
     "Verify every input against the contract documents before relying on this calculation.",
@@ -66,7 +70,8 @@ def cover(calc):
     applied.append(f"Spacing, edges, clearance, slenderness ({limits} limits)")
     apart = [[each.title, each.reason] for each in connection.checks if not each.applies and each.kind == "strength"]
     verdict = "all checks satisfied" if connection.ok else "N.G.: not every check is satisfied"
-    taken = [[f"A{i}", runs_of(text), basis, "stated"] for i, (text, basis) in enumerate(connection.assumptions(), start=1)]
+    taken = [[row["id"], runs_of(row["text"]), row["basis"], row["status"]] for row in calc.register() if row["kind"] == "assumption"]
+    signed = calc.signed()
     return sheet.cover(
         title=connection.inputs.title or connection.title,
         governing=f"{governs.title} governs: required {required(governs)}, available {available(governs)}, "
@@ -77,7 +82,7 @@ def cover(calc):
                   ["Materials", runs_of(connection.materials_text())], ["Units", "kip, inch, ksi"]],
         scope={"checked": applied, "not_applicable": apart, "by_others": list(connection.by_others())},
         assumptions=taken, open_items=calc.open_items(), cautions=list(CAUTIONS[:3]),
-        revisions=[[job.rev, job.date.isoformat(), job.revision_text, job.prepared_by, "", ""]])
+        revisions=[[job.rev, job.date.isoformat(), job.revision_text, signed["by"], signed["checked"], signed["approved"]]])
 
 
 def summary(connection):
@@ -262,6 +267,36 @@ def permissible(connection):
             sheet.prose(runs=f"The connection permits a required tension of {units.floor_figures(capacity)} kip ({basis.method}). "
                              "Largest value of each load with the others as given:"),
             sheet.table(columns=columns, rows=rows)]
+
+
+def review(calc):
+    """Return the record of review: sign-offs, the checker's list, comments with responses, the register of open items; [] if there is none."""
+    log, out = calc.log, []
+    register = [row for row in calc.register() if row["kind"] == "open item"]
+    if not log.events and not register:
+        return []
+    out.append(sheet.heading(text="Sign-offs, review and open items"))
+    held = [log.sign_off(role, calc.content) for role in ROLES]
+    rows = [{"cells": [role, each["who"], each["when"][:10], each["method"] or "–"]} if each else {"cells": [role], "span_reason": [1, "not signed"]}
+            for role, each in zip(ROLES, held)]
+    out.append(sheet.table(columns=[{"head": "Role"}, {"head": "Name"}, {"head": "Date"}, {"head": "Method of check"}], rows=rows))
+    if checker := held[ROLES.index("checker")]:
+        out += [sheet.heading(text="Checker's list", level=2),
+                sheet.pairs(rows=[[name.capitalize(), checker["findings"][name], ""] for name in HEADINGS])]
+    if comments := log.comments():
+        rows = []
+        for each in comments:
+            answers = "; ".join(f"{one['text']} ({one['who']}, {one['when'][:10]})" for one in each["answers"]) or "none yet"
+            closed = f"closed {each['closed']['when'][:10]} by {each['closed']['who']}" if each["closed"] else "open"
+            rows.append({"cells": [each["id"], f"{each['on']} ({each['who']}, {each['when'][:10]}): {each['text']}", answers, closed],
+                         "strong": not each["closed"]})
+        columns = [{"head": "No."}, {"head": "Comment", "width": 2.6}, {"head": "Response", "width": 2.2}, {"head": "Status"}]
+        out += [sheet.heading(text="Review comments", level=2), sheet.table(columns=columns, rows=rows)]
+    if register:
+        rows = [{"cells": [row["id"], row["text"], row["basis"], row["status"]], "strong": row["open"]} for row in register]
+        columns = [{"head": "No."}, {"head": "Item", "width": 2.9}, {"head": "Raised by", "width": 1.2}, {"head": "Status"}]
+        out += [sheet.heading(text="Register of open items", level=2), sheet.table(columns=columns, rows=rows)]
+    return out
 
 
 def used_symbols(connection):

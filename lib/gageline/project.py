@@ -15,6 +15,7 @@ from .errors import InputError, nearest
 FILE = "project.toml"
 
 STATUSES = ("preliminary", "for review", "for approval", "for construction", "superseded", "void")
+PROFILES = ("working", "record")
 
 
 class Project(BaseModel):
@@ -27,15 +28,24 @@ class Project(BaseModel):
     client: str = Field("", description="client")
     location: str = Field("", description="location")
     firm: str = Field("", description="firm that makes the calculation")
+    logo: str = Field("", description="file of the firm's logo beside this file, an SVG")
     edition: Literal["360-22", "360-16"] = Field(description="specification: 360-22 or 360-16 (AISC)")
     method: Literal["LRFD", "ASD"] = Field(description="LRFD or ASD")
     loads: Literal["7-22", "7-16"] = Field(description="loads standard: 7-22 or 7-16 (ASCE/SEI)")
     paper: Literal["us-letter", "a4"] = Field("us-letter", description="us-letter or a4")
-    prepared_by: str = Field(description="initials or name of the preparer", min_length=1)
-    rev: str = Field("0", description="revision", min_length=1, max_length=6)
+    prepared_by: str = Field("", description="who may sign as preparer, names with commas between; empty: anybody")
+    checked_by: str = Field("", description="who may sign as checker; empty: anybody but the preparer")
+    approved_by: str = Field("", description="who may sign as approver; empty: anybody")
+    rev: str = Field("0", description="revision: 0, 1, … or A, B, … before 0", min_length=1, max_length=6)
     date: datetime.date = Field(description="date of the revision, as 2026-12-01")
     revision_text: str = Field("first issue", description="what this revision is")
-    status: Literal[STATUSES] = Field("preliminary", description="preliminary, for review, for approval, for construction, superseded or void")
+    status: Literal[STATUSES] = Field("preliminary", description="status it is issued with: preliminary, for review, for approval or for construction")
+    profile: Literal[PROFILES] = Field("working", description="working: PDF/A-3 with its sources attached; record: PDF/A-2, sources beside it")
+
+    def allowed(self, role):
+        """Return the names that may sign in a role ("preparer", "checker", "approver"); empty where anybody may."""
+        named = {"preparer": self.prepared_by, "checker": self.checked_by, "approver": self.approved_by}[role]
+        return tuple(name.strip() for name in named.split(",") if name.strip())
 
     @property
     def basis(self):
@@ -91,8 +101,7 @@ def find(start=None):
 def write_new(folder, name):
     """Write a project.toml with every key and its meaning into a folder that has none, and return its path."""
     path = Path(folder) / FILE
-    values = {"project": name, "edition": "360-22", "method": "LRFD", "loads": "7-22", "prepared_by": "?",
-              "date": datetime.date.today()}
+    values = {"project": name, "edition": "360-22", "method": "LRFD", "loads": "7-22", "date": datetime.date.today()}
     rows = []
     for key, field in Project.model_fields.items():
         value = values.get(key, field.get_default() if not field.is_required() else "")

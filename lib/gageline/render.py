@@ -79,6 +79,7 @@ def _tidy(body):
     body = re.sub(r"\\operatorname\{(min|max)\}", r"\\\1", body).replace(r",\ ", ",")
     body = re.sub(rf"\\left\( (\\pi|[\d.]+|{slot}) \\right\) \^\{{", r"\1^{", body)
     body = re.sub(r"\^\{ \\left\( (\\frac\{[^{}]*\}\{[^{}]*\}) \\right\) \}", r"^{\1}", body)
+    body = re.sub(r"\^\{ \\left\( - (\d+) \\right\) \}", r"^{-\1}", body)
     return re.sub(r"\s+", " ", body)
 
 
@@ -155,13 +156,14 @@ def _say(node, names):
             return f"minus {say(node.operand)}"
         case ast.Call():
             parts = [say(part) for part in node.args]
-            word = {"min": "the least of", "max": "the greatest of", "sqrt": "the square root of", "tan": "the tangent of"}[node.func.id]
+            word = {"min": "the least of", "max": "the greatest of", "sqrt": "the square root of", "sin": "the sine of", "cos": "the cosine of",
+                    "tan": "the tangent of", "acos": "the arc cosine of"}[node.func.id]
             return f"{word} {parts[0]}" if len(parts) == 1 else f"{word} {', '.join(parts[:-1])} and {parts[-1]}"
         case ast.BinOp(op=ast.Pow(), right=ast.Constant(value=2)):
             return f"{_grouped(node.left, names)} squared"
     words = {ast.Add: "plus", ast.Sub: "minus", ast.Mult: "times", ast.Div: "divided by", ast.Pow: "to the power of"}
     flat = isinstance(node.op, (ast.Add, ast.Sub))
-    left = say(node.left) if flat else _grouped(node.left, names)
+    left = say(node.left) if flat else _grouped(node.left, names, also=(ast.Mult, ast.Div) if isinstance(node.op, ast.Pow) else ())
     right = _grouped(node.right, names, also=(ast.Mult, ast.Div) if isinstance(node.op, (ast.Div, ast.Pow)) else ())
     return f"{left} {words[type(node.op)]} {right}"
 

@@ -1,17 +1,23 @@
 """Running a calculation's notebook in a kernel of this interpreter, and making its PDF from what it displayed."""
 
+import contextlib
 import copy
 import json
 import logging
 import os
 import re
 import subprocess
+import sys
 import tempfile
 from concurrent.futures import ThreadPoolExecutor
 from pathlib import Path
 
 from . import cells
 from .errors import ReportError
+
+_LOADED_EARLY = ["for _ in ('gageline.calc', 'gageline.figures', 'gageline.render', 'handcalcs.handcalcs', 'matplotlib.figure', "
+                 "'matplotlib.backends.backend_svg'): __import__(_)", "del _"]
+"""What a kernel runs while its owner checks the inputs; it leaves no name behind."""
 
 CELL_SECONDS = 300
 """A cell that runs longer is taken to hang."""
@@ -75,8 +81,10 @@ def execute(book, folder, on_cell=None, before=lambda: None):
 async def _execute(book, folder, on_cell, checked):
     import asyncio
 
-    import nbformat
     from jupyter_client.manager import AsyncKernelManager
+
+    with _without_grammars():
+        import nbformat
     from nbclient import NotebookClient
     from nbclient.exceptions import CellExecutionError, CellTimeoutError, DeadKernelError
 
@@ -87,7 +95,8 @@ async def _execute(book, folder, on_cell, checked):
     if os.name == "posix":
         # ipc sockets leave no port to race for and draw no notice about an unencrypted connection; their path must be absolute and short.
         manager.transport, manager.ip = "ipc", str(Path(sockets.name) / "k")
-    client = NotebookClient(node, km=manager, timeout=CELL_SECONDS, resources={"metadata": {"path": str(folder)}})
+    client = NotebookClient(node, km=manager, timeout=CELL_SECONDS, resources={"metadata": {"path": str(folder)}},
+                            extra_arguments=[f"--IPKernelApp.exec_lines={_LOADED_EARLY!r}"])
     number = 0
     quiet = {"PYDEVD_DISABLE_FILE_VALIDATION": "1", "GAGELINE_PROJECT": str(folder)}
     try:
@@ -109,23 +118,47 @@ async def _execute(book, folder, on_cell, checked):
     return node
 
 
+@contextlib.contextmanager
+def _without_grammars():
+    """Within it jsonschema does without rfc3987_syntax, which builds grammars for two seconds at import that no notebook needs."""
+    name = "rfc3987_syntax"
+    if name in sys.modules:
+        yield
+        return
+    sys.modules[name] = None
+    try:
+        yield
+    finally:
+        del sys.modules[name]
+
+
 def _last_line(error):
     if error.ename:
-        said = str(error.evalue).strip().splitlines()
-        return f"{said[0] if said else error.ename}" if error.ename.endswith("Error") and said else f"{error.ename}: {said[0] if said else ''}"
+        return sentence_of(error.ename, str(error.evalue))
     return str(error).strip().splitlines()[-1]
+
+
+def sentence_of(name, text):
+    """Return what to say of an exception of this name and text that stopped a cell."""
+    said = text.strip().splitlines()
+    return said[0] if name.endswith("Error") and said else f"{name}: {said[0] if said else ''}"
 
 
 def save_notebook(path, node):
     """Write an executed notebook back, whole or not at all, without what changes from run to run."""
     from .sheet import write_pdf
 
+    write_pdf(path, notebook_bytes(node))
+
+
+def notebook_bytes(node):
+    """Return an executed notebook as it is kept: without what changes from run to run."""
     book = json.loads(json.dumps(node))
     for cell in book["cells"]:
         cell["metadata"].pop("execution", None)
         for output in cell.get("outputs", []):
             output.get("metadata", {}).clear()
-    write_pdf(path, (json.dumps(book, indent=1, ensure_ascii=False, sort_keys=True) + "\n").encode())
+    return (json.dumps(book, indent=1, ensure_ascii=False, sort_keys=True) + "\n").encode()
 
 
 def preview_path(notebook_path, project_folder, mark):
@@ -174,9 +207,17 @@ def report(path, overrides=None, out=None, save=False, say=lambda text: None):
         target = Path(out) if out else preview_path(path, calc.project_path.parent, calc.connection.inputs.mark)
         _writable(target)
         checked.append((calc, target))
+        warming.submit(warm)
+
+    def warm():
+        from .sheet.build import check_printable
+
+        check_printable("-", ["-"])
 
     say("checking the inputs")
-    node = execute(book, folder, lambda i, n: say(f"running cell {i} of {n}"), before=check)
+    # While the kernel runs the cells, the compiler reads fonts and look.
+    with ThreadPoolExecutor(1) as warming:
+        node = execute(book, folder, lambda i, n: say(f"running cell {i} of {n}"), before=check)
     calc, out = checked[0]
     say("setting the sheets")
     from .sheet import build_pdf, write_pdf

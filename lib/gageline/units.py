@@ -206,6 +206,8 @@ def ratio_text(ratio):
     >>> ratio_text(0.9124), ratio_text(1.0002), ratio_text(0.99999)
     ('0.912', '1.001', '1.000')
     """
+    if ratio == math.inf:
+        return "∞"
     if ratio > 1.0 + 1e-9:
         return f"{math.ceil(ratio * 1000 - 1e-6) / 1000:.3f}"
     return f"{ratio:.3f}"

@@ -16,7 +16,7 @@ from gageline.errors import GagelineError, InputError, ScopeError
 
 DOUBLE = ANGLE | {"member": "2L4x4x1/2", "member_length": "20 ft"}
 TEE = PLATE | {"member": "WT8x25", "member_grade": "A992", "connected_by": "flange", "gage": "3-1/2 in", "plate_width": "14 in"}
-STEM = PLATE | {"member": "WT9x25", "member_grade": "A992", "connected_by": "stem", "gage_from_back": "2-1/2 in", "plate_width": "14 in"}
+STEM = PLATE | {"member": "WT9x25", "member_grade": "A992", "connected_by": "stem", "gage_from_back": "3 in", "plate_width": "7 in"}
 WEB = PLATE | {"member": "W18x50", "member_grade": "A992", "connected_by": "web", "plate_width": "12 in", "rows": 4}
 CHANNEL = PLATE | {"member": "C12x20.7", "member_grade": "A36", "plate_width": "14 in", "gage": "4 in"}
 WIDE = PLATE | {"member": "PL 1/2 x 14", "plate_width": "16 in"}
@@ -201,14 +201,18 @@ SWEPT = {"plain": {}, "staggered": {"stagger": "1-1/2 in"}, "little stagger": {"
          "fillers": {"filler_thickness": "1/2 in", "fillers": 2}, "deformation": {"deformation_considered": False}}
 
 
+EVERYWHERE = ("plain", "staggered", "long")
+"""What is swept on every base; the rest on the plate, the angle and the flanges only, to save time."""
+
+PAIRS = [pytest.param(base, changes, id=f"{name} {what}") for name, base in BASES.items() for what, changes in SWEPT.items()
+         if what in EVERYWHERE or name in ("plate", "angle") or (name == "flanges" and what != "two plates")]
+
+
 class TestSweep:
-    @each_base
-    @pytest.mark.parametrize("changes", SWEPT.values(), ids=SWEPT)
+    @pytest.mark.parametrize("base, changes", PAIRS)
     def test_array_of_pitches_equals_one_design_at_a_time(self, base, changes):
-        if base["member"].startswith("2L") and changes.get("plates") == 2:
-            changes = {}
         base = base | changes
-        pitches = np.array([2.5, 3.0, 3.4375, 6.0])
+        pitches = np.array([2.5, 3.4375, 6.0])
         swept = study.over_pitch(bolted(base), pitches)
 
         for i, pitch in enumerate(pitches):
@@ -219,7 +223,7 @@ class TestSweep:
     @pytest.mark.parametrize("lines, stagger", [(2, 1.5), (3, 1.5), (3, 2.0), (4, 1.0)])
     def test_a_wide_staggered_plate_too(self, lines, stagger):
         base = PLATE | {"member": "PL 1/2 x 16", "plate_width": "16 in", "lines": lines, "stagger": f"{stagger} in", "rows": 4}
-        pitches = np.linspace(2.5, 9.0, 14)
+        pitches = np.linspace(2.5, 9.0, 9)
         swept = study.over_pitch(bolted(base), pitches)
 
         for i, pitch in enumerate(pitches):
@@ -229,7 +233,7 @@ class TestSweep:
 
     def test_open_holes_in_the_other_leg_too(self):
         base = ANGLE | {"other_leg_holes": "1-1/2 in, 2-1/2 in; 6 in, 2-1/2 in"}
-        pitches = np.linspace(2.5, 6.0, 15)
+        pitches = np.linspace(2.5, 6.0, 9)
         swept = study.over_pitch(bolted(base), pitches)
 
         for i, pitch in enumerate(pitches):
@@ -611,7 +615,11 @@ class TestWhitmore:
         assert found["Whitmore yielding"].nominal == pytest.approx(50 * 0.5 * L_w)
         assert found["Whitmore rupture"].nominal == pytest.approx(65 * 0.5 * (L_w - 2 * 1.0))
 
-    @pytest.mark.parametrize("lines", [1, 2, 3])
+    def test_one_bolt_has_no_width_to_buckle(self):
+        with pytest.raises(ScopeError, match="one bolt has no Whitmore width"):
+            bolted(PLATE | BRACE | {"rows": 1, "pitch": None, "lines": 1, "gage": []})
+
+    @pytest.mark.parametrize("lines", [2, 3])
     def test_one_row_has_no_spread_and_no_negative_width(self, lines):
         base = PLATE | {"rows": 1, "pitch": None, "lines": lines, "gage": "3 in" if lines > 1 else None}
         base |= {"plate_width": "12 in", "member": "PL 1/2 x 12"}
@@ -648,6 +656,13 @@ class TestReversal:
         used = {value[0].__name__ for length in (1, 8, 30) for value in self.gusset(gusset_length=f"{length} in").steps if not isinstance(value, str)}
 
         assert {"gusset_yielding_in_compression", "inelastic_buckling", "elastic_buckling"} <= used
+
+    @pytest.mark.parametrize("slender, name", [(24.9, "gusset_yielding_in_compression"), (25.1, "gusset_buckling")])
+    def test_the_strip_yields_up_to_a_slenderness_of_25(self, slender, name):
+        """J4.4: F_y A_g for L_c/r <= 25, Chapter E beyond; single brace, K = 0.7."""
+        length = slender * 0.5 / math.sqrt(12) / 0.7
+
+        assert value_of(self.gusset(gusset_length=f"{length!r} in"), name) > 0
 
     def test_a_compact_corner_gusset_yields(self):
         check = self.gusset(gusset_support="compact corner", gusset_length=None)
@@ -736,7 +751,7 @@ def inputs(draw):
 
 
 class TestAnyInput:
-    @settings(max_examples=150, deadline=None, derandomize=True, suppress_health_check=[HealthCheck.filter_too_much, HealthCheck.too_slow])
+    @settings(max_examples=100, deadline=None, derandomize=True, suppress_health_check=[HealthCheck.filter_too_much, HealthCheck.too_slow])
     @given(inputs())
     def test_strengths_are_positive_or_the_input_is_refused_in_a_sentence(self, drawn):
         values, method, edition = drawn
@@ -755,5 +770,5 @@ class TestAnyInput:
         strengths = nominal(connection)
         assert strengths["bolts member"] <= strengths["bolt shear"] * (1 + 1e-12)
         assert strengths["bolts plate"] <= strengths["bolt shear"] * (1 + 1e-12)
-        assert strengths["Whitmore yielding"] <= strengths["plate yielding"] * (1 + 1e-12)
+        assert strengths.get("Whitmore yielding", 0) <= strengths["plate yielding"] * (1 + 1e-12)
         json.dumps(connection.to_dict(), allow_nan=False)

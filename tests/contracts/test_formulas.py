@@ -24,7 +24,7 @@ COUNTED = {"n", "n_a", "n_b", "n_h", "n_j", "n_p", "n_s", "n_z", "n_v"}
 """Symbols that are whole numbers in practice."""
 
 RANGES = {"ksi": (10.0, 120.0), "in": (0.2, 40.0), "in²": (0.1, 60.0), "in³": (1.0, 900.0), "kip": (1.0, 900.0), "1/in": (0.1, 1.0),
-          "rad": (0.1, 1.2), "": (0.05, 2.5)}
+          "kip/in": (0.5, 30.0), "kip·in": (1.0, 900.0), "rad": (0.1, 1.2), "": (0.05, 2.5)}
 """Values of the size that steel connections have, by display unit."""
 
 
@@ -41,11 +41,15 @@ def samples(made, count=40):
                 values.append(rng.uniform(26, 200))
             elif name == "E":
                 values.append(29000.0)
+            elif name == "t" and "t_f" in made.arguments:
+                values.append(rng.uniform(0.2, 4.0))  # a web, not a block
             else:
                 values.append(rng.uniform(*RANGES[SYMBOLS[name].unit]))
         if "n_a" in made.arguments and "n" in made.arguments:
             i, j = made.arguments.index("n_a"), made.arguments.index("n")
             values[i], values[j] = sorted((values[i], values[j] + 12))
+        if "t_p" in made.arguments and "R_o" in made.arguments:
+            values[made.arguments.index("t_p")] *= values[made.arguments.index("R_o")] / RANGES["in"][1]  # a gusset fits into its tube
         out.append(values)
     return out
 

@@ -1,6 +1,7 @@
 """The house's order, read from its imports with ast: who may know whom, and how long a module may be."""
 
 import ast
+import subprocess
 import sys
 from pathlib import Path
 
@@ -13,20 +14,21 @@ MODULES = sorted(path for path in ROOT.rglob("*.py") if "_templates" not in path
 
 LEVEL = {
     "errors": 0, "symbols": 0,
-    "units": 1, "facts": 1, "geometry": 1, "loads": 1,
-    "formula": 2,
+    "store": 1, "units": 1, "facts": 1, "geometry": 1, "loads": 1,
+    "formula": 2, "signoffs": 2,
     "render": 3, "provisions": 3,
     "check": 4,
     "editions": 5,
     "connections": 6,
     "study": 7, "families": 7,
-    "figures": 8, "sheet": 8, "archive": 8, "cells": 8, "project": 8,
+    "figures": 8, "sheet": 8, "cells": 8, "project": 8, "search": 8,
     "identity": 9, "view": 9, "presenting": 9,
     "calc": 10,
     "running": 11,
-    "starting": 12,
-    "cli": 13,
-    "__main__": 14,
+    "starting": 12, "archive": 12, "schedule": 12,
+    "archive_cli": 13, "schedule_cli": 13,
+    "cli": 14,
+    "__main__": 15,
 }
 """Part of the package -> its level. An import goes to a lower level, inside a part, or between parts named in ``BESIDE``."""
 
@@ -40,16 +42,19 @@ OUTSIDE = {
     "handcalcs": {"render"},
     "matplotlib": {"figures"},
     "pydantic": {"connections", "project"},
-    "typer": {"cli"},
-    "rich": {"cli", "running"},
-    "typst": {"sheet", "identity"},
-    "pypandoc": {"sheet", "identity"},
-    "pikepdf": {"sheet", "archive", "identity"},
+    "typer": {"cli", "archive_cli", "schedule_cli"},
+    "rich": {"cli", "archive_cli", "schedule_cli"},
+    "openpyxl": {"schedule"},
+    "distributed": {"schedule"},
+    "IPython": {"calc", "schedule"},
+    "typst": {"sheet", "archive"},
+    "pypandoc": {"sheet"},
+    "pikepdf": {"sheet", "archive"},
     "nbconvert": {"sheet"},
     "nbclient": {"running", "sheet"},
     "nbformat": {"sheet", "running", "starting", "cells", "archive"},
     "papermill": set(),
-    "numpy": {"formula", "check", "geometry", "connections", "study", "figures", "calc", "loads", "presenting"},
+    "numpy": {"formula", "check", "geometry", "connections", "study", "search", "figures", "calc", "loads", "presenting"},
 }
 """Outside library -> parts that may import it."""
 
@@ -57,16 +62,20 @@ STANDARD_ONLY = ("errors", "symbols", "facts", "provisions")
 """Parts that import nothing from outside but the standard library."""
 
 
+DRAWING = ("drawing.py", "section.py")
+"""Modules of a family that draw it. They may know figures; the rest of the family knows neither, but inside a function."""
+
+
 def part_of(path):
     """Return the part of the package a module belongs to."""
     return path.relative_to(ROOT).parts[0].removesuffix(".py")
 
 
-def imported(path):
+def imported(path, inside_functions=True):
     """Return (line, dotted name) of every import of a module, those inside functions too; our own begin with gageline."""
     package = ("gageline", *path.relative_to(ROOT).parent.parts)
-    found = []
-    for node in ast.walk(ast.parse(path.read_text(encoding="utf-8"))):
+    found, tree = [], ast.parse(path.read_text(encoding="utf-8"))
+    for node in ast.walk(tree) if inside_functions else tree.body:
         if isinstance(node, ast.Import):
             found += [(node.lineno, alias.name) for alias in node.names]
         elif isinstance(node, ast.ImportFrom) and not node.level:
@@ -106,9 +115,27 @@ def test_part_has_its_level(path):
 def test_imports_run_downwards(path):
     here = part_of(path)
     wrong = [f"line {line}: {here} imports {there}" for line, there in own(path)
-             if there != here and LEVEL[there] >= LEVEL[here] and (here, there) not in BESIDE]
+             if there != here and LEVEL[there] >= LEVEL[here] and (here, there) not in BESIDE and (here, there) != ("connections", "figures")]
 
     assert not wrong
+
+
+@within("connections")
+def test_a_family_computes_without_its_drawing(path):
+    if path.name in DRAWING:
+        return
+    loaded = [name for _, name in imported(path, inside_functions=False)]
+
+    assert not [name for name in loaded if name.startswith("gageline.figures") or {"drawing", "section"} & set(name.split("."))]
+
+
+def test_computing_loads_neither_drawing_nor_report():
+    families = sorted(path.parent.name for path in ROOT.glob("connections/*/__init__.py"))
+    heavy = ("matplotlib", "handcalcs", "IPython", "nbformat", "typst", "pypandoc", "typer")
+    code = f"import sys; {'; '.join(f'import gageline.connections.{name}' for name in families)}; print([m for m in {heavy} if m in sys.modules])"
+    found = subprocess.run([sys.executable, "-c", code], capture_output=True, text=True, timeout=60)
+
+    assert found.stdout.strip() == "[]", found.stderr[-300:]
 
 
 def test_every_exception_to_the_order_is_needed():

@@ -5,7 +5,7 @@ from pathlib import Path
 
 sys.path.insert(0, str(Path(__file__).parents[1]))
 
-from published import test_published
+from . import test_published
 
 if __name__ == "__main__":
     for case in test_published.CASES:

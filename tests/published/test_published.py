@@ -1,10 +1,11 @@
-"""The published cases of cases.toml, one printed number at a time.
+"""The published cases of cases*.toml, one printed number at a time.
 
 An example names its ``source``, the ``edition`` it follows and its ``evidence``: "found" (the page was read), "memory" (a published
 document recalled, its numbers recomputed) or "derived" (evaluated by hand from published constants: guards against change, no evidence).
-It has ``work``, plain steps that call the package's formulas, tables and geometry, or a whole ``connection``. Each of its ``results`` is
-an expression (``is``) or a ``check`` of the connection (or one ``step`` of it, by the formula's name, or its ``demand``), with what the
-source prints: ``printed`` or ``nominal``, and ``lrfd`` and ``asd`` where it prints available strengths (by the ``state`` of check.FACTORS).
+It has ``work``, plain steps that call the package's formulas, tables and geometry, or a whole ``connection`` of a ``family`` (bolted
+where none is named). Each of its ``results`` is an expression (``is``) or a ``check`` of the connection (or one ``step`` of it, by the
+formula's name, or its ``demand``), with what the source prints: ``printed`` or ``nominal``, and ``lrfd`` and ``asd`` where it prints
+available strengths (by the ``state`` of check.FACTORS).
 
 Half the last printed digit is allowed; a source that rounds on the way gets a ``tolerance_percent`` and says ``why``.
 """
@@ -19,16 +20,15 @@ from types import SimpleNamespace
 import pytest
 from helpers import checks, formulas, value_of
 
-from gageline import geometry
+from gageline import families, geometry
 from gageline.check import FACTORS
-from gageline.connections.bolted import BoltedConnection
 from gageline.facts import bolts as bolt_facts
 from gageline.facts import shapes
 from gageline.formula import EDITIONS
 from gageline.geometry.whitmore import whitmore
 
 EVIDENCE = ("found", "memory", "derived")
-EXAMPLE_KEYS = {"id", "source", "edition", "evidence", "work", "connection", "computed_by", "results"}
+EXAMPLE_KEYS = {"id", "source", "edition", "evidence", "work", "connection", "family", "computed_by", "results"}
 RESULT_KEYS = {"is", "check", "step", "demand", "state", "printed", "nominal", "lrfd", "asd", "evidence", "tolerance_percent", "why"}
 
 DEVIATIONS = {}
@@ -98,7 +98,7 @@ class Runner:
         given = {"mark": self.example["id"], **self.example["connection"]}
         if "tension" in given:
             given["demand_level"] = method
-        return BoltedConnection.of(edition=self.edition, method=method, **given)
+        return families.family(self.example.get("family", "bolted")).of(edition=self.edition, method=method, **given)
 
     def found(self, row, kind):
         method = "ASD" if kind == "asd" else "LRFD"
@@ -116,7 +116,8 @@ class Runner:
         return phi * value if method == "LRFD" else value / omega
 
 
-EXAMPLES = tomllib.loads((Path(__file__).parent / "cases.toml").read_text(encoding="utf-8"))["example"]
+EXAMPLES = [example for path in sorted(Path(__file__).parent.glob("cases*.toml"))
+            for example in tomllib.loads(path.read_text(encoding="utf-8"))["example"]]
 
 
 def collect(examples):

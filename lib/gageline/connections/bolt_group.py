@@ -65,13 +65,15 @@ def at_holes(joint, ply, reversed_load=False):
             do.say(f"Each bolt bears on {ply.n_plies} {ply.name} plies; t is their total.")
         r_nb = do(_bearing(joint, ply), joint.bolts.d, t, ply.F_u)
         for (kind, _), (l_c, number) in classes.items():
-            do.say(f"{number * joint.element.joints} bolt{'s' if number * joint.element.joints > 1 else ''} towards "
-                   + {"edge": "the edge of the part:", "hole": "the next hole:"}[kind])
-            along = ply.hole.along
-            l_c = do(rules.clear_to_edge, l_c + along / 2, along) if kind == "edge" else do(rules.clear_to_hole, l_c + along, along)
-            r_nt = do(_tearout(joint, ply), l_c, t, ply.F_u)
-            r_n = do(rules.weakest_at_bolt, r_nv, r_nb, r_nt)
             count = number * joint.element.joints
+            ahead = {"edge": "towards the edge of the part", "hole": "towards the next hole", "none": "with the part running on ahead"}[kind]
+            do.say(f"{count} bolt{'s' if count > 1 else ''} {ahead}:")
+            if kind == "none":
+                r_n = do(rules.weaker_without_tearout, r_nv, r_nb)
+            else:
+                along = ply.hole.along
+                l_c = do(rules.clear_to_edge, l_c + along / 2, along) if kind == "edge" else do(rules.clear_to_hole, l_c + along, along)
+                r_n = do(rules.weakest_at_bolt, r_nv, r_nb, do(_tearout(joint, ply), l_c, t, ply.F_u))
             R_n = do(rules.first_like_bolts, count, r_n) if R_n is None else do(rules.more_like_bolts, R_n, count, r_n)
         return R_n
 
@@ -82,12 +84,11 @@ def _classes(ply, reversed_load=False):
     """Group the bolts by what lies ahead of them: {(kind, clear distance): [clear distance, number]}, weakest first."""
     holes, end = ply.bolted, ply.end
     if reversed_load:
-        # Away from its end a ply runs on: the edge is put far off, so that bearing decides at the last bolt.
-        holes, end = mirrored(holes), (1e3, 0.0)
+        holes, end = mirrored(holes), (np.inf, 0.0)
     groups = defaultdict(int)
     values = {}
     for clear in clear_distances(holes, end):
-        kind = str(np.ravel(clear.kind)[0])
+        kind = str(np.ravel(clear.kind)[0]) if np.all(np.isfinite(clear.l_c)) else "none"
         key = (kind, round(float(first(clear.l_c)), 6))
         values[key] = clear.l_c
         groups[key] += 1

@@ -20,7 +20,7 @@ WAYS = {
 }
 """Series -> the elements through which it may be bolted."""
 
-_FLAT = re.compile(r"\s*(?:pl|plate|bar|flat)\.?\s*(?P<t>[^x×]+?)\s*[x×]\s*(?P<w>.+?)\s*$", re.IGNORECASE)
+_FLAT = re.compile(r"\s*(?:plate|pl|bar|flat)\.?\s*(?P<t>[^x×]+?)\s*[x×]\s*(?P<w>.+?)\s*$", re.IGNORECASE)
 
 
 @dataclass(frozen=True)
@@ -40,7 +40,7 @@ class Element:
     case : "7 flange", "7 web", "8" or "" for what Table D3.1 offers besides case 2. wide_flange : b_f at least 2/3 d.
     r : least radius of gyration and r_name its sign. [in]
     offset : y of the member's centroid in the plane of the element, None where J1.7 does not ask for it. [in]
-    section : the shape, for drawing.
+    section : the shape, for drawing. gap : between the backs of a double angle. other_leg : width of the leg not connected. [in]
     """
 
     member: str
@@ -64,16 +64,18 @@ class Element:
     offset: float | None
     section: object
     edge_names: tuple = ("lower edge", "upper edge")
+    gap: float = 0.0
+    other_leg: float = 0.0
 
 
-def element(designation, way=None, gap=0.0):
+def element(designation, way=None, gap=None, usual_gap=0.0):
     """Return the connected element of a member.
 
     Parameters
     ----------
     designation : shape, or "PL 1/2 x 6" (thickness x width) for a flat bar or plate.
     way : one of ``WAYS``; may be left out where there is one only, or where an angle has equal legs.
-    gap : clear distance between the backs of a double angle. [in]
+    gap : clear distance between the backs of a double angle; None: as written in the designation, or ``usual_gap``. [in]
 
     Raises
     ------
@@ -84,12 +86,19 @@ def element(designation, way=None, gap=0.0):
     """
     flat = _FLAT.match(designation)
     if flat:
+        if way not in (None, "flat"):
+            raise InputError(f"connected_by = {way!r}: a flat bar or plate is bolted flat; leave connected_by out")
         return _flat(designation, units.read(_inch(flat["t"]), "in", "member thickness"), units.read(_inch(flat["w"]), "in", "member width"))
     shape = shapes.shape(designation)
     if shape.series not in WAYS:
         raise InputError(f"member {shape.name}: series {shape.series} has no bolted end here; bolted are {', '.join(WAYS)}")
     ways = WAYS[shape.series]
     single = shape.single or shape
+    written = {"LLBB": "long leg", "SLBB": "short leg"}.get(shape.orientation)
+    if written and single.b_long != single.b_short:
+        if way not in (None, written):
+            raise InputError(f"connected_by = {way!r}: {shape.name} is connected by its {written}s")
+        way = written
     if (way == "leg" and "long leg" in ways) or (way is None and "long leg" in ways and single.b_long == single.b_short):
         if single.b_long != single.b_short:
             raise InputError(f"connected_by: {shape.name} has unequal legs; give long leg or short leg")
@@ -99,6 +108,8 @@ def element(designation, way=None, gap=0.0):
     if way not in ways:
         raise InputError(f"connected_by = {way!r}: {shape.name} may be bolted through {' or '.join(ways)}")
     build = {"both flanges": _flanges, "web": _web, "flange": _tee_flange, "stem": _stem}.get(way, _leg)
+    if gap is None:
+        gap = usual_gap if shape.gap is None else shape.gap
     return build(shape, way, gap)
 
 
@@ -181,4 +192,4 @@ def _leg(shape, way, gap):
     x_bar = single.x_bar if long else single.y_bar
     name = "leg" if single.b_long == single.b_short else way
     return Element(shape.name, shape.series, name, pieces, 1, pieces, leg, single.t, 0.0, (outstanding,), (single.t,), pieces * single.A,
-                   share * pieces * single.A, lambda do: x_bar, "8", False, r, r_name, None, shape, ("heel", "toe"))
+                   share * pieces * single.A, lambda do: x_bar, "8", False, r, r_name, None, shape, ("heel", "toe"), gap, other)

@@ -1,8 +1,9 @@
 """Types of input fields: quantities written with their unit, choices, lists; and one sentence for whatever is wrong with them."""
 
+from contextlib import contextmanager
 from typing import Annotated, Any, Literal, get_args, get_origin
 
-from pydantic import BaseModel, BeforeValidator, ConfigDict, Field, ValidationError
+from pydantic import BaseModel, BeforeValidator, ConfigDict, Field, Strict, ValidationError
 
 from .. import units
 from ..errors import GagelineError, InputError, nearest
@@ -26,6 +27,7 @@ Length = _quantity("in")
 Force = _quantity("kip")
 Angle = _quantity("rad")
 Number = _quantity("")
+Count = Annotated[int, Strict()]
 
 
 def _texts(value, info):
@@ -132,12 +134,28 @@ def _sentence(cls, error):
         return f"{name} = {error['input']!r} is not allowed; allowed: {allowed}"
     if cause is not None:
         return str(cause)
-    limits = error.get("ctx", {})
-    limit = ", ".join(f"{word.replace('_', ' ')} {value}" for word, value in limits.items())
     words = {"int_parsing": "a whole number", "int_type": "a whole number", "int_from_float": "a whole number", "string_type": "a text in quotes",
-             "bool_type": "True or False", "bool_parsing": "True or False", "greater_than_equal": f"a number with {limit}",
-             "less_than_equal": f"a number with {limit}", "greater_than": f"a number with {limit}", "less_than": f"a number with {limit}"}
-    return f"{name} = {error['input']!r} is not allowed; give {words.get(error['type'], error['msg'])}"
+             "bool_type": "True or False", "bool_parsing": "True or False", "string_too_short": "a text that is not empty"}
+    bounds = {"less_than_equal": ("le", "a number of at most"), "less_than": ("lt", "a number less than"), "greater_than_equal": ("ge", "a number of at least"),
+              "greater_than": ("gt", "a number greater than")}
+    allowed = words.get(error["type"], error["msg"])
+    if error["type"] in bounds:
+        key, word = bounds[error["type"]]
+        limit, unit = error["ctx"][key], _unit(cls.model_fields[name]) or ""
+        limit, unit = (limit * 57.29577951308232, "deg") if unit == "rad" else (limit, unit)
+        allowed = f"{word} {f'{limit:,.10g}'.replace(',', ' ')} {unit}".strip()
+    return f"{name} = {error['input']!r} is not allowed; give {allowed}"
+
+
+@contextmanager
+def naming(input_name):
+    """Put an input's name before the sentence of an error raised within, where it does not stand there already."""
+    try:
+        yield
+    except GagelineError as error:
+        if input_name in str(error):
+            raise
+        raise type(error)(f"{input_name}: {error}") from None
 
 
 def _choices(annotation):

@@ -2,11 +2,13 @@
 
 from collections import Counter
 from dataclasses import replace
+from itertools import product
 
 import numpy as np
 
 from ..check import governing
 from ..geometry import chain_through, critical_chains, lines_of
+from ..geometry.pattern import first
 from ..provisions import connecting, tension
 from .joint import DAMAGE
 from .outcome import Outcome, worked
@@ -21,7 +23,7 @@ def net_rupture(joint):
     """Return rupture on the member's most critical chain, with shear lag and the share of load left at the chain."""
     element = joint.element
     holes = joint.member.holes
-    chains = _chains(holes, element.A_g / element.pieces)
+    found = chains(holes, element.A_g / element.pieces)
 
     def strength(chain, do):
         A_n = net_area(do, chain, element.A_g, element.pieces, holes)
@@ -33,49 +35,58 @@ def net_rupture(joint):
         xi = do(tension.load_share, chain.n_total * element.joints, chain.n_ahead * element.joints)
         return do(tension.net_rupture_behind_lead_row, joint.member.F_u, A_e, xi)
 
-    nominal, chain, steps = governing(chains, strength)
-    notes = () if chain is None else _chain_notes(chains, chain, element, holes)
+    nominal, chain, steps = governing(found, strength)
+    notes = () if chain is None else _chain_notes(found, chain, element, holes)
     return Outcome(nominal, steps, chain, notes)
 
 
 def plate_rupture(ply):
     """Return rupture of the connection plates over their physical width; every element is connected, so U = 1.0."""
     A_g = ply.pieces * ply.width * ply.t
-
-    def strength(chain, do):
-        A_n = net_area(do, chain, A_g, ply.pieces, ply.holes)
-        A_e = do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1))
-        if np.all(chain.n_ahead == 0):
-            return do(connecting.plate_rupture, ply.F_u, A_e)
-        do.say(f"The chain lies behind {chain.n_ahead} of the {chain.n_total} bolts.")
-        return do(connecting.plate_rupture_behind_lead_row, ply.F_u, A_e, do(tension.load_share, chain.n_total, chain.n_ahead))
-
-    nominal, chain, steps = governing(_chains(ply.holes, ply.width * ply.t), strength)
+    nominal, chain, steps = governing(chains(ply.holes, ply.width * ply.t), lambda chain, do: plate_chain(do, chain, A_g, ply, ply.holes))
     return Outcome(nominal, steps, chain)
 
 
-def _chains(holes, A_g):
-    """Return the chains to evaluate: the critical ones of a single layout, or of a sweep all that can become critical."""
-    arrays = [hole.x for hole in holes if isinstance(hole.x, np.ndarray)]
-    if not arrays:
+def plate_chain(do, chain, A_g, ply, holes):
+    """Work out the rupture strength of plates on one chain of holes out of a gross area."""
+    A_e = do(tension.effective_net_area, net_area(do, chain, A_g, ply.pieces, holes), do(tension.shear_lag_case_1))
+    if np.all(chain.n_ahead == 0):
+        return do(connecting.plate_rupture, ply.F_u, A_e)
+    do.say(f"The chain lies behind {chain.n_ahead} of the {chain.n_total} bolts.")
+    return do(connecting.plate_rupture_behind_lead_row, ply.F_u, A_e, do(tension.load_share, chain.n_total, chain.n_ahead))
+
+
+def chains(holes, A_g):
+    """Return the chains to evaluate: the critical ones of a single layout, or of a sweep all that can become critical.
+
+    In a sweep these are the critical ones of layouts sampled over it, and every chain through the two foremost holes of each
+    line: with equal pitches along the lines a chain that runs farther back loses more area than its share of load gives back.
+    """
+    size = max(np.size(value) for hole in holes for value in (hole.x, hole.y, hole.t))
+    if size == 1 and not any(isinstance(value, np.ndarray) for hole in holes for value in (hole.x, hole.y, hole.t)):
         return critical_chains(holes, A_g, DAMAGE)
-    size = max(x.size for x in arrays)
     picks = set()
-    for sample in sorted({round(i * (size - 1) / 16) for i in range(17)}):
-        frozen = [_at(hole, sample) for hole in holes]
-        picks |= {chain.holes for chain in critical_chains(frozen, A_g, DAMAGE, most=8)}
+    for sample in sorted({round(i * (size - 1) / 8) for i in range(9)}):
+        picks |= {chain.holes for chain in critical_chains([_at(hole, sample) for hole in holes], _entry(A_g, sample), DAMAGE, most=8)}
+    lines = lines_of(holes)
+    if len(lines) <= 4 and len({first(holes[line[0]].x) for line in lines}) > 1:
+        picks |= {chain for choice in product(*((None, *line[:2]) for line in lines)) if (chain := tuple(i for i in choice if i is not None))}
     return [chain_through(holes, pick, DAMAGE) for pick in sorted(picks)]
 
 
 def _at(hole, sample):
-    return replace(hole, x=float(np.broadcast_to(hole.x, np.size(hole.x))[min(sample, np.size(hole.x) - 1)]))
+    return replace(hole, x=_entry(hole.x, sample), y=_entry(hole.y, sample), t=_entry(hole.t, sample))
+
+
+def _entry(value, sample):
+    """Return one layout's number of a sweep."""
+    return float(np.ravel(value)[min(sample, np.size(value) - 1)])
 
 
 def net_area(do, chain, A_g, pieces, holes):
     """Work out the net area on a chain, like holes and like diagonals together, over all like pieces."""
-    groups = Counter((holes[i].across, holes[i].t) for i in chain.holes)
     A_h = None
-    for (across, t), number in sorted(groups.items()):
+    for across, t, number in _like_holes(holes[i] for i in chain.holes):
         d_n = do(tension.hole_width, across, DAMAGE)
         if A_h is None:
             A_h = do(tension.first_hole_loss, pieces * number, d_n, t)
@@ -88,6 +99,16 @@ def net_area(do, chain, A_g, pieces, holes):
         else:
             A_s = do(tension.more_diagonal_credit, A_s, pieces * number, s, g, t)
     return do(tension.net_area_straight, A_g, A_h) if A_s is None else do(tension.net_area_zigzag, A_g, A_h, A_s)
+
+
+def _like_holes(holes):
+    """Return (across, t, number) of like holes; in a sweep those of one element hold the very same array of thicknesses."""
+    groups = {}
+    for hole in holes:
+        key = (hole.across, id(hole.t) if isinstance(hole.t, np.ndarray) else hole.t)
+        _, _, number = groups.get(key, (0, 0, 0))
+        groups[key] = (hole.across, hole.t, number + 1)
+    return [groups[key] for key in sorted(groups)]
 
 
 def _like_spaces(spaces):
@@ -136,8 +157,8 @@ def chain_name(chain):
     return f"{shape} chain of {number} hole{'s' if number > 1 else ''}"
 
 
-def _chain_notes(chains, chosen, element, holes):
-    others = [chain for chain in chains if chain is not chosen][:3]
+def _chain_notes(found, chosen, element, holes):
+    others = [chain for chain in found if chain is not chosen][:3]
     A_g = element.A_g / element.pieces
     lines = len(lines_of([hole for hole in holes if hole.bolted]))
     listed = "; ".join(f"{chain_name(chain)}, {chain.n_ahead} of {chain.n_total} bolts ahead: "

@@ -10,7 +10,7 @@ from itertools import pairwise
 
 import numpy as np
 
-from .pattern import TOL
+from .pattern import TOL, first, least
 
 ZIGZAG = 1e-9  # [in.²] added per diagonal, so that of equal chains the straighter comes first
 
@@ -74,7 +74,7 @@ def chain_through(holes, picks, allowance):
 
     Parameters
     ----------
-    holes : the holes; their x may be (N,).
+    holes : the holes; their x, y and t may be (N,).
     picks : indices of the holes it runs through, no two at one y.
     allowance : what is added to the hole dimension across the force for damage. [in]
 
@@ -83,11 +83,11 @@ def chain_through(holes, picks, allowance):
     Between holes in elements of different thickness s²/(4g) counts with the lesser thickness, which is safe; how
     much of the diagonal lies in which element is not known here.
     """
-    picks = tuple(sorted(picks, key=lambda i: holes[i].y))
+    picks = tuple(sorted(picks, key=lambda i: first(holes[i].y)))
     spaces = []
     for a, b in pairwise(picks):
         s, g = abs(holes[b].x - holes[a].x), holes[b].y - holes[a].y
-        spaces.append((s, g, min(holes[a].t, holes[b].t)))
+        spaces.append((s, g, least([holes[a].t, holes[b].t])))
     removed = sum((holes[i].across + allowance) * holes[i].t for i in picks)
     added = sum((s**2 / (4.0 * g) * t for s, g, t in spaces), 0.0)
     ahead = sum((hole.x < _x_at(holes, picks, hole.y) - TOL) * 1 for hole in holes if hole.bolted)
@@ -128,11 +128,11 @@ def polyline(chain, holes, width):
 
 
 def _x_at(holes, picks, y):
-    """x of the chain at a height."""
-    if y <= holes[picks[0]].y:
+    """x of the chain at a height; which of its spaces the height falls into is read from the first layout of a sweep."""
+    if first(y) <= first(holes[picks[0]].y):
         return holes[picks[0]].x
     for a, b in pairwise(picks):
-        if y <= holes[b].y:
+        if first(y) <= first(holes[b].y):
             part = (y - holes[a].y) / (holes[b].y - holes[a].y)
             return holes[a].x + part * (holes[b].x - holes[a].x)
     return holes[picks[-1]].x

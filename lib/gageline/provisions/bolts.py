@@ -317,6 +317,26 @@ def weakest_at_bolt(r_nv, r_nb, r_nt):
 
 
 @formula({"360-16": "J3.6, User Note", "360-22": "J3.7, User Note"})
+def weaker_without_tearout(r_nv, r_nb):
+    """Nominal strength of one bolt with its hole where the part runs on and no edge or hole lies ahead.
+
+    Parameters
+    ----------
+    r_nv : nominal shear strength of one bolt. [kip]
+    r_nb : nominal bearing strength at the hole. [kip]
+
+    Returns
+    -------
+    r_n : nominal strength of one bolt with its hole. [kip]
+
+    >>> weaker_without_tearout.bare(23.9, 117.0)
+    23.9
+    """
+    r_n = min(r_nv, r_nb)
+    return r_n
+
+
+@formula({"360-16": "J3.6, User Note", "360-22": "J3.7, User Note"})
 def first_like_bolts(n_b, r_n):
     """Strength of like bolts of a group.
 

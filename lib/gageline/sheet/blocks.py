@@ -88,19 +88,21 @@ def _rows(value, name, width):
 
 
 def meta(
-    *, project, mark, title, rev, rev_date, by, edition, method, loads, status,
-    client="", location="", job="", firm="", by_date="", checked="", checked_date="", approved="", approved_date="",
-    paper="us-letter", logo="", attachments=(), identification=(),
+    *, project, mark, title, rev, rev_date, edition, method, loads, status,
+    client="", location="", job="", firm="", by="", by_date="", checked="", checked_date="", approved="", approved_date="",
+    paper="us-letter", logo="", watermark="", statement="", attachments=(), identification=(),
 ):  # fmt: skip
     """Return the data of the title block and of the PDF's own record; a notebook has exactly one.
 
     Parameters
     ----------
-    project, mark, title, rev, by, edition, method, loads, status : text, not empty; edition like "AISC 360-22".
+    project, mark, title, rev, edition, method, loads, status : text, not empty; edition like "AISC 360-22".
     rev_date : text, ISO date "2026-12-01"; it also dates the PDF, so that equal input gives equal bytes.
-    client, location, job, firm, by_date, checked, checked_date, approved, approved_date : text, may be empty.
+    client, location, job, firm, by, by_date, checked, checked_date, approved, approved_date : text, may be empty.
     paper : "us-letter" or "a4".
     logo : text of an SVG, or empty.
+    watermark : a word or two printed large and pale behind every sheet, or empty.
+    statement : sentence below the status on the cover, or empty.
     attachments : list of {name, mime, text, description}; each lands in the PDF unchanged.
     identification : list of [key, value]; printed at the end where no block identification prints its own.
 
@@ -109,11 +111,12 @@ def meta(
     ReportError : a field is malformed.
     """
     block = {"kind": "meta"}
-    filled = {"project": project, "mark": mark, "title": title, "rev": rev, "rev_date": rev_date, "by": by}
+    filled = {"project": project, "mark": mark, "title": title, "rev": rev, "rev_date": rev_date}
     filled |= {"edition": edition, "method": method, "loads": loads, "status": status}
     for name, value in filled.items():
         block[name] = _text(value, f"meta.{name}", filled=True)
-    optional = {"client": client, "location": location, "job": job, "firm": firm, "logo": logo, "by_date": by_date}
+    optional = {"client": client, "location": location, "job": job, "firm": firm, "logo": logo, "by": by, "by_date": by_date}
+    optional |= {"watermark": watermark, "statement": statement}
     optional |= {"checked": checked, "checked_date": checked_date, "approved": approved, "approved_date": approved_date}
     for name, value in optional.items():
         block[name] = _text(value, f"meta.{name}")
@@ -209,8 +212,8 @@ def table(*, columns, rows, caption=""):
     Parameters
     ----------
     columns : list of {"head": runs, "align": "left" | "center" | "right", "width": inches, optional}.
-    rows : list of {"cells": [runs], "strong": bool, "span_reason": [from_column, runs], optional}; a row with a reason
-        has from_column cells, and the reason spans what is left.
+    rows : list of {"cells": [runs], "strong": bool, "span_reason": [from_column, runs], "changed": revision,
+        optional}; a row with a reason has from_column cells, and the reason spans what is left.
     caption : runs.
 
     Raises
@@ -234,8 +237,8 @@ def table(*, columns, rows, caption=""):
 
 
 def _table_row(row, width):
-    if not isinstance(row, dict) or "cells" not in row or set(row) - {"cells", "strong", "span_reason"}:
-        raise ReportError(f"A row of a table has cells and perhaps strong and span_reason, got {row!r}.")
+    if not isinstance(row, dict) or "cells" not in row or set(row) - {"cells", "strong", "span_reason", "changed"}:
+        raise ReportError(f"A row of a table has cells and perhaps strong, span_reason and changed, got {row!r}.")
     cells = [_runs(cell, "a cell of table.rows") for cell in _list(row["cells"], "table.rows.cells")]
     span = row.get("span_reason")
     if span is not None:
@@ -246,10 +249,11 @@ def _table_row(row, width):
     filled = width if span is None else span[0]
     if len(cells) != filled:
         raise ReportError(f"A row of a table has {len(cells)} cells where {filled} belong: {row['cells']!r}.")
-    return {"cells": cells, "strong": bool(row.get("strong", False)), "span_reason": span}
+    changed = _text(row.get("changed", ""), "changed of a table's row")
+    return {"cells": cells, "strong": bool(row.get("strong", False)), "span_reason": span, "changed": changed}
 
 
-def equation(*, lines, alt, clause="", note=""):
+def equation(*, lines, alt, clause="", note="", changed=""):
     """Return lines of a calculation, aligned on their equals signs, with the clause beside them.
 
     Parameters
@@ -258,6 +262,7 @@ def equation(*, lines, alt, clause="", note=""):
     alt : text that reads the lines aloud; a PDF without it is not accessible.
     clause : text in the right column, such as "Eq. D2-2".
     note : text under the clause.
+    changed : revision that changed these lines, printed in a triangle beside them, or empty.
 
     Raises
     ------
@@ -279,10 +284,11 @@ def equation(*, lines, alt, clause="", note=""):
         "alt": _text(alt, "equation.alt", filled=True),
         "clause": _text(clause, "equation.clause"),
         "note": _text(note, "equation.note"),
+        "changed": _text(changed, "equation.changed"),
     }
 
 
-def verdict(*, lhs, ratio_text, ok, text=""):
+def verdict(*, lhs, ratio_text, ok, text="", changed=""):
     """Return the line that closes a check: available strength, "D/C = text = ratio", and OK or N.G. in words.
 
     Parameters
@@ -291,6 +297,7 @@ def verdict(*, lhs, ratio_text, ok, text=""):
     text : text of the quotient ("178 / 451"), may be empty.
     ratio_text : text of the ratio as it may be printed: never rounded down past a limit.
     ok : True, False, or None where nothing is judged.
+    changed : revision that changed it, or empty.
     """
     if ok not in (True, False, None):
         raise ReportError(f"verdict.ok must be true, false or null, got {ok!r}.")
@@ -300,6 +307,7 @@ def verdict(*, lhs, ratio_text, ok, text=""):
         "text": _text(text, "verdict.text"),
         "ratio_text": _text(ratio_text, "verdict.ratio_text", filled=True),
         "ok": ok,
+        "changed": _text(changed, "verdict.changed"),
     }
 
 

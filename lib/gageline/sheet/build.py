@@ -9,14 +9,16 @@ import tempfile
 from pathlib import Path
 
 from ..errors import ReportError
+from . import blocks as kinds
 from . import guard, maths
 from .assets import sheet_file
 from .notebook import collect, source_text
 
-STANDARDS = ("a-3a", "ua-1")
+STANDARDS = {"working": ("a-3a", "ua-1"), "record": ("a-2a", "ua-1")}
+"""Profile -> what the PDF conforms to; PDF/A-2 takes no attachments."""
 
 
-def build_pdf(notebook, *, attachments=(), sheet_folder=None):
+def build_pdf(notebook, *, attachments=(), sheet_folder=None, profile="working"):
     """Set an executed notebook as a calculation sheet.
 
     Parameters
@@ -24,17 +26,40 @@ def build_pdf(notebook, *, attachments=(), sheet_folder=None):
     notebook : NotebookNode or dict of notebook format 4, executed, with one block meta among its outputs.
     attachments : further {name, mime, text, description} beside those of meta; the notebook's source goes along anyway.
     sheet_folder : folder with a sheet.typ of the project's own, or None for the look that ships.
+    profile : "working" (PDF/A-3a, all attached) or "record" (PDF/A-2a, nothing attached).
 
     Returns
     -------
-    pdf : bytes, PDF/A-3a and PDF/UA-1; the same notebook gives the same bytes.
+    pdf : bytes, PDF/A and PDF/UA-1; the same notebook gives the same bytes.
 
     Raises
     ------
     ReportError : anything that would make the sheet wrong, unreadable or incomplete; the message is one sentence.
     """
-    data = sheet_data(notebook, attachments=attachments)
-    return _compile(data, sheet_file(sheet_folder))
+    return set_pdf(sheet_data(notebook, attachments=attachments), sheet_folder=sheet_folder, profile=profile)
+
+
+def set_pdf(data, *, sheet_folder=None, profile="working"):
+    """Set what ``sheet_data`` returned, in one of the profiles of ``STANDARDS``, and return the PDF's bytes."""
+    if profile == "record":
+        data = data | {"attachments": []}
+    return _compile(data, sheet_file(sheet_folder), STANDARDS[profile])
+
+
+def check_printable(name, texts):
+    """Stop where a sheet could not print a name in its title block or a text in a table: a sign its fonts lack, a word too long.
+
+    Raises
+    ------
+    ReportError : one sentence that names the sign or the word.
+    """
+    meta = kinds.meta(project="-", mark="-", title="-", rev="-", rev_date="2000-01-01", edition="-", method="-", loads="-", status="-",
+                      by=name, checked=name, approved=name)
+    columns = [{"head": "", "width": width} for width in (0.5, 2.2, 3.2)]
+    block = kinds.table(columns=columns, rows=[{"cells": ["", text, text]} for text in texts]) | {"where": "the text"}
+    _check_text(block, "the text")
+    head = {key: value for key, value in meta.items() if key not in ("attachments", "identification")}
+    _compile({"meta": head, "blocks": [block], "attachments": []}, sheet_file(), STANDARDS["working"])
 
 
 def sheet_data(notebook, *, attachments=()):
@@ -77,9 +102,11 @@ def write_pdf(path, pdf):
 
     Raises
     ------
-    ReportError : the folder is missing or cannot be written to.
+    ReportError : the folder is missing or cannot be written to, or the PDF there is an issued one.
     """
     path = Path(path)
+    if path.suffix == ".pdf" and _is_issued(path):
+        raise ReportError(f"{path} is an issued revision and is never overwritten; give another name.")
     temporary = None
     try:
         handle, temporary = tempfile.mkstemp(dir=path.parent, prefix=f".{path.name}.", suffix=".part")
@@ -93,6 +120,14 @@ def write_pdf(path, pdf):
         if temporary is not None:
             Path(temporary).unlink(missing_ok=True)
         raise ReportError(f"The PDF cannot be written to {path}: {(error.strerror or str(error)).lower()}.") from None
+
+
+def _is_issued(path):
+    record = path.with_suffix(".json")
+    try:
+        return record.is_file() and b'"gageline_record"' in record.read_bytes()
+    except OSError:
+        return True
 
 
 def _check_order(placed):
@@ -200,28 +235,31 @@ def _with_typst_maths(blocks):
 
 
 @functools.cache
-def _fonts():
+def fonts():
+    """Return the fonts that travel with the compiler; no other is used."""
     import typst
 
     return typst.Fonts(include_system_fonts=False, include_embedded_fonts=True)
 
 
-def _compile(data, look):
+def _compile(data, look, standards):
     try:
         import typst
     except ImportError:
         raise ReportError("Typst is missing: install the package typst.") from None
+    # As a file, not as an input: Typst forgets all it has laid out when an input changes. A firm's older look may still ask for the input.
+    source, text = look.read_bytes(), json.dumps(data, ensure_ascii=False)
     noon = datetime.datetime.fromisoformat(data["meta"]["rev_date"] + "T12:00:00+00:00")
     try:
         pdf, warnings = typst.compile_with_warnings(
-            str(look),
+            {"main.typ": source, "data.json": text.encode()},
             root=str(look.parent),
-            font_paths=_fonts(),
+            font_paths=fonts(),
             ignore_system_fonts=True,
             format="pdf",
-            pdf_standards=list(STANDARDS),
+            pdf_standards=list(standards),
             timestamp=int(noon.timestamp()),
-            sys_inputs={"data": json.dumps(data, ensure_ascii=False)},
+            sys_inputs={"data": text} if b"sys.inputs" in source else {},
         )
     except typst.TypstError as error:
         raise ReportError(_explained(error, data)) from None

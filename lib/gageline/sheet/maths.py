@@ -19,7 +19,9 @@ SHORT_ROW = 45  # printed characters below which a row is never in want of a bre
 LONG_TERM = 60  # printed characters above which even a product may be broken
 
 _cache = {}
-_CACHE_LIMIT = 20_000  # a schedule of marks repeats its formulas, not its numbers: forget rather than grow
+_CACHE_LIMIT = 20_000
+_NUMBER = re.compile(r"\d+\.\d+|\d{2,}")  # of one digit it may be an exponent or a factor: part of the shape
+_STAND_IN = 90_710_000
 
 
 def tidied(latex):
@@ -133,17 +135,37 @@ def converted(formulas):
     ------
     ReportError : pandoc, which is told to take no warning, could not read a formula; the message holds it.
     """
-    wanted = list(dict.fromkeys(formulas))
-    missing = [latex for latex in wanted if latex not in _cache]
+    shapes = {latex: _shape(latex) for latex in formulas}
+    missing = list(dict.fromkeys(shape for shape, _ in shapes.values() if shape not in _cache))
     if missing:
         done, complaint = _convert(missing)
         if complaint:
-            raise ReportError(_unreadable(missing, complaint))
+            raise ReportError(_unreadable(list(shapes), complaint))
         if len(_cache) + len(missing) > _CACHE_LIMIT:
             _cache.clear()
-            return converted(wanted)
+            return converted(formulas)
         _cache.update(zip(missing, done))
-    return {latex: _cache[latex] for latex in wanted}
+    return {latex: _with_numbers(_cache[shape], numbers) for latex, (shape, numbers) in shapes.items()}
+
+
+def _shape(latex):
+    """Return maths with its numbers exchanged for stand-ins, and the numbers: marks of a schedule differ in numbers alone."""
+    numbers = []
+
+    def stand_in(match):
+        numbers.append(match[0])
+        return f"{_STAND_IN + len(numbers)}{'.5' if '.' in match[0] else ''}"
+
+    return (latex, ()) if str(_STAND_IN)[:4] in latex else (_NUMBER.sub(stand_in, latex), tuple(numbers))
+
+
+def _with_numbers(typst, numbers):
+    for i, number in enumerate(numbers, start=1):
+        stand_in = f"{_STAND_IN + i}{'.5' if '.' in number else ''}"
+        if typst.count(stand_in) != 1:
+            raise ReportError(f"The number {number} of a formula would be lost on the way to the sheet; write the formula more simply.")
+        typst = typst.replace(stand_in, number)
+    return typst
 
 
 def _convert(formulas):

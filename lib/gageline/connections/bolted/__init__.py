@@ -11,9 +11,11 @@ from ...errors import InputError
 from ...facts import bolts as facts
 from ...facts import grades
 from ...geometry import End, Hole, centred_edge, grid, mirrored
-from .. import bolt_group, details, gusset, net_section, tear_out
+from ...geometry.pattern import least, most
+from .. import bolt_group, details, net_section, plate, tear_out
 from ..base import Connection, Sweep, Table
 from ..element import element
+from ..fields import naming
 from ..joint import Bolts, Gusset, Joint, Ply
 from . import refusals
 from .inputs import BoltedInputs
@@ -32,16 +34,22 @@ class BoltedConnection(Connection):
     Model = BoltedInputs
     parts = {"member": "Member", "bolts": "Bolts", "plate": "Connection plate", "detailing": "Spacing, edges, clearance"}
 
-    def __init__(self, inputs, basis=None):
+    def __init__(self, inputs, basis=None, refuse_layout=True):
         super().__init__(inputs, basis)
-        self.size = facts.bolt_size(inputs.bolt)
-        self.bolt_group = facts.bolt_group(inputs.bolt_grade, self.basis.edition)
-        self.element = element(inputs.member, inputs.connected_by, inputs.plate_thickness if inputs.gap is None else inputs.gap)
-        self.member_material = self._material(inputs.member_grade, inputs.member)
-        self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
+        with naming("bolt"):
+            self.size = facts.bolt_size(inputs.bolt)
+        with naming("bolt_grade"):
+            self.bolt_group = facts.bolt_group(inputs.bolt_grade, self.basis.edition)
+        with naming("member"):
+            self.element = element(inputs.member, inputs.connected_by, inputs.gap, inputs.plate_thickness)
+        with naming("member_grade"):
+            self.member_material = self._material(inputs.member_grade, inputs.member)
+        with naming("plate_grade"):
+            self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
         refusals.installation(self)
         self.joint = self._joint()
-        refusals.layout(self)
+        if refuse_layout:
+            refusals.layout(self)
 
     def _material(self, grade, designation):
         if self.element.series != "PL":
@@ -51,12 +59,12 @@ class BoltedConnection(Connection):
 
     # The joint that the inputs describe
 
-    def centres(self, rows=None, pitch=None):
+    def centres(self, given):
         """Return the hole centres on the connected element, x from the first row and y from the lower edge of the strip.
 
-        ``rows`` and ``pitch`` (which may be an array) replace the inputs' in a sweep.
+        ``given`` is the inputs, or the inputs with changes (numbers or arrays) of a sweep.
         """
-        given, part = self.inputs, self.element
+        part = self.element
         back = part.back or 0.0
         if given.holes:
             if given.lines or given.rows or given.pitch or given.gage or given.stagger:
@@ -65,12 +73,10 @@ class BoltedConnection(Connection):
             return [(x - least, y - back) for x, y in given.holes]
         if missing := [name for name in ("lines", "rows") if getattr(given, name) is None]:
             raise InputError(f"input {missing[0]} is missing: give lines, rows, pitch and gage, or holes")
-        rows = given.rows if rows is None else rows
         if given.pitch is None and given.rows > 1:
             raise InputError("input pitch is missing: spacing along the line, for example 3 in")
-        if given.pitch is not None and given.pitch <= 0:
-            raise InputError(f"pitch = {units.printed(given.pitch)} in is not allowed; give a length greater than 0")
-        pitch = given.pitch if pitch is None else pitch
+        if given.pitch is not None and np.any(np.less_equal(given.pitch, 0)):
+            raise InputError(f"pitch = {units.printed(np.min(given.pitch))} in is not allowed; give a length greater than 0")
         gages = list(given.gage) * (given.lines - 1) if len(given.gage) == 1 else list(given.gage)
         if len(gages) != given.lines - 1:
             raise InputError(f"gage: {given.lines} lines have {given.lines - 1} spaces between them, got {len(given.gage)}")
@@ -82,11 +88,11 @@ class BoltedConnection(Connection):
             raise InputError(f"input gage_from_back is missing: back of the {part.name} to the first gage line")
         else:
             edge = given.gage_from_back - back
-        return grid(given.lines, rows, 0.0 if pitch is None else pitch, gages, given.stagger, edge)
+        return grid(given.lines, given.rows, 0.0 if given.pitch is None else given.pitch, gages, given.stagger, edge)
 
-    def _joint(self, rows=None, pitch=None):
-        given, part = self.inputs, self.element
-        centres = self.centres(rows, pitch)
+    def _joint(self, **changes):
+        given, part = _Changed(self.inputs, changes), self.element
+        centres = self.centres(given)
         member_hole, plate_hole = self._hole(given.member_holes), self._hole(given.plate_holes)
         holes = [Hole(x, y, *member_hole, part.t) for x, y in centres]
         if given.other_leg_holes:
@@ -94,10 +100,10 @@ class BoltedConnection(Connection):
                 raise InputError(f"other_leg_holes is for angles; {part.member} is none")
             standard = self._hole("STD")
             holes += [Hole(x, -(y - part.t), *standard, part.t, bolted=False) for x, y in given.other_leg_holes]
-        last = _most(x for x, _ in centres)
+        last = most([x for x, _ in centres])
         member = Ply("member", self.member_material.F_y, self.member_material.F_u, part.t, part.plies, part.pieces, tuple(holes),
                      End(last + given.member_end), part.width, given.member_holes)
-        axis = (centres_low(centres) + centres_high(centres)) / 2
+        axis = (least([y for _, y in centres]) + most([y for _, y in centres])) / 2
         y_lo = axis - given.plate_width / 2 - given.plate_offset
         shifted = [Hole(x, y - y_lo, *plate_hole, given.plate_thickness) for x, y in centres]
         slope = 1 / math.tan(given.plate_edge_angle)
@@ -111,9 +117,9 @@ class BoltedConnection(Connection):
         bolts = Bolts(self.size.name, group.name, self.size.d, group.F_nv_X if given.threads == "X" else group.F_nv_N, given.threads, n_s,
                       facts.pretension(self.size, group) if slip_critical else 0.0, given.installation,
                       {"A": 0.30, "B": 0.50}.get(given.slip_class, 0.0))
-        gap = 0.0 if given.gap is None else (given.gap - given.plate_thickness) / 2
+        gap = (part.gap - self.inputs.plate_thickness) / 2 if part.plies == 2 else 0.0
         t_filler, n_fillers = given.filler_thickness + gap, given.fillers + (1 if gap > 1e-9 else 0)
-        return Joint(part, member, plate, bolts, self._gusset(), t_filler, n_fillers, given.deformation_considered, given.U_by_hand, given.U_basis)
+        return Joint(part, member, plate, bolts, self._gusset(given.plate_width), t_filler, n_fillers, given.deformation_considered, given.U_by_hand, given.U_basis)
 
     def _hole(self, kind):
         """Return (across, along) of a hole as written in the inputs. [in]"""
@@ -121,7 +127,7 @@ class BoltedConnection(Connection):
         hole = facts.hole(self.size, name)
         return (hole.length, hole.width) if direction == "across" else (hole.width, hole.length)
 
-    def _gusset(self):
+    def _gusset(self, width):
         given = self.inputs
         support, K, length = given.gusset_support, given.gusset_K, given.gusset_length
         basis = ""
@@ -130,16 +136,16 @@ class BoltedConnection(Connection):
                 raise InputError("gusset_support = 'by hand' needs gusset_K and a written basis in gusset_K_basis")
             basis = f"K by hand. Basis: {given.gusset_K_basis}"
         elif support is not None:
-            if support not in gusset.K_CHOICES:
-                raise InputError(f"gusset_support = {support!r} is not known; allowed: {', '.join((*gusset.K_CHOICES, 'by hand'))}")
-            K, basis = gusset.K_CHOICES[support]
+            if support not in plate.K_CHOICES:
+                raise InputError(f"gusset_support = {support!r} is not known; allowed: {', '.join((*plate.K_CHOICES, 'by hand'))}")
+            K, basis = plate.K_CHOICES[support]
         if self.demand.required_compression > 0:
             if support is None:
                 raise InputError(f"the member goes into compression ({units.printed(self.demand.required_compression)} kip): give gusset_support "
-                                 f"({', '.join((*gusset.K_CHOICES, 'by hand'))}) and gusset_length")
+                                 f"({', '.join((*plate.K_CHOICES, 'by hand'))}) and gusset_length")
             if length is None and K is not None:
                 raise InputError("input gusset_length is missing: last row to the support, along the load")
-        return Gusset(given.plate_width, 0.0, given.plate_width, K, length, basis)
+        return Gusset(width, 0.0, width, K, length, basis)
 
     # The checks
 
@@ -160,13 +166,17 @@ class BoltedConnection(Connection):
         ]
         if joint.bolts.T_b:
             rows.append(("slip", "Slip", "bolts", slip, bolt_group.slip_factor(joint), False, bolt_group.slip))
+        # A single bolt spreads its load from a point: it has no Whitmore width.
+        whitmore = [] if len(joint.pattern) == 1 else [
+            ("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "yielding", False, plate.whitmore_yielding),
+            ("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "rupture", False, plate.whitmore_rupture),
+        ]
         return [
             *rows,
-            ("plate yielding", "Plate, yielding of the gross section", "plate", "J4.1(a)", "yielding", False, gusset.gross_yielding),
+            ("plate yielding", "Plate, yielding of the gross section", "plate", "J4.1(a)", "yielding", False, plate.gross_yielding),
             ("plate rupture", "Plate, rupture of the net section", "plate", "J4.1(b)", "rupture", False,
              lambda j: net_section.plate_rupture(j.plate)),
-            ("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "yielding", False, gusset.whitmore_yielding),
-            ("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "rupture", False, gusset.whitmore_rupture),
+            *whitmore,
             ("plate block", "Plate, block shear", "plate", "J4.3", "block shear", False,
              lambda j: tear_out.block_shear(j.plate, tear_out.plate_part(j))),
         ]
@@ -177,6 +187,9 @@ class BoltedConnection(Connection):
         for id, title, part, clause, state, axial, evaluate in self.limit_states(joint):
             if id == "plate yielding" and not joint.bolts.T_b:
                 yield not_applicable("slip", "Slip", "bolts", CLAUSES["slip"][edition], f"joint designed in bearing ({self.inputs.installation})")
+            if id == "plate block" and len(joint.pattern) == 1:
+                yield not_applicable("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "one bolt has no Whitmore width")
+                yield not_applicable("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "one bolt has no Whitmore width")
             found = evaluate(joint)
             notes = (*found.notes, *(bolt_group.stricter_note(joint) if id == "bolts plate" else ()))
             demand = max(T, C) if id in ("bolt shear", "slip") else T
@@ -197,7 +210,7 @@ class BoltedConnection(Connection):
                  lambda: bolt_group.at_holes(joint, joint.member, reversed_load=True)),
                 ("bolts plate reversed", "Bolts with plate holes, compression", clause, "bolts", False,
                  lambda: bolt_group.at_holes(joint, joint.plate, reversed_load=True)),
-                ("gusset compression", "Plate, compression on the Whitmore width", "J4.4", "compression", True, lambda: gusset.compression(joint))]
+                ("gusset compression", "Plate, compression on the Whitmore width", "J4.4", "compression", True, lambda: plate.compression(joint))]
         for id, title, clause, state, axial, evaluate in rows:
             part = "plate" if id == "gusset compression" else "bolts"
             if C <= 0:
@@ -305,7 +318,7 @@ class BoltedConnection(Connection):
         if given.holes:
             return "Not drawn: the holes are given one by one, so there is no pitch at which rows could be added."
         pitch, stagger = given.pitch or 3.0, abs(given.stagger) * (given.lines > 1)
-        first = 1 if self.element.eccentricity is None or given.U_by_hand is not None else 2
+        first = 1 if given.lines > 1 and (self.element.eccentricity is None or given.U_by_hand is not None) else 2
         rows = list(range(first, max(given.rows + 4, 8) + 1))
         stretched = None
         if given.rows > 1:
@@ -318,28 +331,26 @@ class BoltedConnection(Connection):
             at = f" at {units.fraction(pitch)} in" if rows[i] > 1 else ""
             return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, l = {units.fraction(lengths[i])} in"
 
-        return Sweep(lengths, [self.at(rows=n, pitch=pitch) for n in rows], rows.index(given.rows), describe, stretched,
+        return Sweep(lengths, [self.at(rows=n, pitch=pitch) for n in rows], rows.index(given.rows) if given.rows in rows else None, describe, stretched,
                      f"{given.rows} rows at other pitches", marks=tuple(f"{n} rows" for n in rows))
 
-    def at(self, rows=None, pitch=None):
-        """Return the joint with another number of rows or another pitch (which may be an array), unvalidated, for a sweep."""
-        return self._joint(rows, pitch)
+    def at(self, **changes):
+        """Return the joint with changed inputs, unvalidated, for a sweep.
+
+        ``rows`` takes a number; ``pitch``, ``gage`` (a tuple), ``gage_from_back``, ``stagger``, ``member_end``, ``plate_end``,
+        ``plate_thickness``, ``plate_width`` and ``plate_offset`` take numbers or arrays (n,) in inches.
+        """
+        return self._joint(**changes)
 
 
-def centres_low(centres):
-    """Return the least y of hole centres. [in]"""
-    return min(y for _, y in centres)
+class _Changed:
+    """Inputs with some of them replaced."""
 
+    def __init__(self, inputs, changes):
+        self._inputs, self._changes = inputs, changes
 
-def centres_high(centres):
-    """Return the greatest y of hole centres. [in]"""
-    return max(y for _, y in centres)
-
-
-def _most(values):
-    values = list(values)
-    return np.maximum.reduce(values) if any(isinstance(value, np.ndarray) for value in values) else max(values)
-
+    def __getattr__(self, name):
+        return self._changes[name] if name in self._changes else getattr(self._inputs, name)
 
 
 def _three(value):

@@ -3,9 +3,9 @@
 import math
 from typing import Literal
 
-from .. import gusset
+from .. import plate
 from ..base import CalcInputs
-from ..fields import Angle, Length, Lengths, Number, Points, note
+from ..fields import Angle, Count, Length, Lengths, Number, Points, note
 
 HoleKind = Literal["STD", "OVS", "SSL across", "SSL along", "LSL across", "LSL along"]
 
@@ -31,10 +31,10 @@ class BoltedInputs(CalcInputs):
     plate_edge_angle: Angle = note("angle between the load and the free edge of the plate", math.pi / 2, group=_PLATE, gt=0.5, lt=2.65)
     plate_offset: Length = note("axis of the pattern off the centre line of the plate", 0.0, group=_PLATE, ge=-100, le=100)
     filler_thickness: Length = note("fillers at one shear plane, total thickness", 0.0, group=_PLATE, ge=0, le=6)
-    fillers: int = note("number of fillers at one shear plane", 0, group=_PLATE, ge=0, le=4)
+    fillers: Count = note("number of fillers at one shear plane", 0, group=_PLATE, ge=0, le=4)
 
-    lines: int | None = note("gage lines", None, group=_PATTERN, ge=1, le=10)
-    rows: int | None = note("bolts in each line", None, group=_PATTERN, ge=1, le=40)
+    lines: Count | None = note("gage lines", None, group=_PATTERN, ge=1, le=10)
+    rows: Count | None = note("bolts in each line", None, group=_PATTERN, ge=1, le=40)
     pitch: Length | None = note("spacing along the line", None, group=_PATTERN, le=24)
     gage: Lengths = note("spacing of the lines: one for all, or one for each space", (), group=_PATTERN)
     gage_from_back: Length | None = note("back of the leg, or outer face of the tee's flange, to the first line", None, group=_PATTERN, gt=0, le=60)
@@ -53,7 +53,7 @@ class BoltedInputs(CalcInputs):
     deformation_considered: bool = note("deformation at bolt holes at service load is a consideration", True, group=_BOLTS)
     bare_weathering: bool = note("bare weathering steel outdoors", False, group=_BOLTS)
 
-    gusset_support: str | None = note(f"one of: {', '.join(gusset.K_CHOICES)}; or by hand", None, group=_GUSSET)
+    gusset_support: str | None = note(f"one of: {', '.join(plate.K_CHOICES)}; or by hand", None, group=_GUSSET)
     gusset_length: Length | None = note("last row to the support, along the load", None, group=_GUSSET, ge=0, le=240)
     gusset_K: Number | None = note("effective length factor, with gusset_support = by hand", None, group=_GUSSET, gt=0, le=2.5)
     gusset_K_basis: str = note("written basis of gusset_K", "", group=_GUSSET)

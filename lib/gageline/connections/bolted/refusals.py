@@ -26,15 +26,16 @@ def installation(c):
             raise ScopeError(f"{name} = 'OVS': oversized holes are permitted in slip-critical joints only ({clause})")
         if kind.endswith("along"):
             raise ScopeError(f"{name} = {kind!r}: in a bearing joint a slot must lie across the load ({clause}); turn it or make the joint slip-critical")
-    long = [given.member_holes.startswith("LSL"), given.plate_holes.startswith("LSL")]
-    if sum(long) == 2 or (long[1] and given.plates == 2) or (long[0] and c.element.plies == 2):
-        raise ScopeError(f"long slots are permitted in one ply at a faying surface only ({clause})")
+    if given.member_holes.startswith("LSL") and given.plate_holes.startswith("LSL"):
+        raise ScopeError(f"member_holes and plate_holes are both long slots; they are permitted in one part at a faying surface only ({clause})")
+    if c.element.name == "flange" and given.plates == 2:
+        raise ScopeError("plates = 2: a second plate inside a flange is split by the web or stem and is not covered; use plates = 1")
     if given.gap is not None and c.element.plies != 2:
         raise InputError(f"gap is for double angles; {c.element.member} is none")
     if c.element.plies == 2 and given.plates == 2:
         raise InputError("plates = 2: a double angle is bolted to one plate between its angles")
-    if given.gap is not None and given.gap < given.plate_thickness - 1e-9:
-        raise InputError(f"gap = {units.fraction(given.gap)} in is less than the plate's thickness of {units.fraction(given.plate_thickness)} in")
+    if c.element.plies == 2 and c.element.gap < given.plate_thickness - 1e-9:
+        raise InputError(f"gap = {units.fraction(c.element.gap)} in is less than the plate's thickness of {units.fraction(given.plate_thickness)} in")
     if given.U_by_hand is not None and len(given.U_basis.strip()) < 10:
         raise InputError("U_by_hand needs a written basis in U_basis")
     if (given.fillers == 0) != (given.filler_thickness == 0):
@@ -52,6 +53,8 @@ def layout(c):
             x = hole.x if ply.name == "member" else -hole.x
             raise InputError(f"hole at x = {units.fraction(x)} in, y = {units.fraction(hole.y)} in is cut by an edge of the {named[ply.name]}, "
                              f"{units.fraction(ply.width)} in wide; move it or change the part")
+    _other_leg(c)
+    _room_for_plates(c)
     pair = closest_pair(joint.pattern)
     if pair and pair.spacing < 8 / 3 * d - 1e-9:
         raise ScopeError(f"holes {units.printed(pair.spacing)} in apart: the minimum spacing is 2-2/3 d = {units.printed(8 / 3 * d)} in "
@@ -74,7 +77,35 @@ def layout(c):
     if joint.rows < 2 and c.element.eccentricity is not None and c.inputs.U_by_hand is None:
         raise ScopeError("one bolt per line: Table D3.1 case 2 needs a connection length, so no U applies; use at least 2 rows, "
                          "or set U_by_hand with its basis")
+    if len(joint.pattern) == 1 and c.demand.required_compression > 0:
+        raise ScopeError("one bolt has no Whitmore width, so the plate's strength in compression cannot be found (J4.4); use at least 2 rows")
     _eccentricity(c)
+
+
+def _other_leg(c):
+    """Open holes must lie in the outstanding leg, clear of its edges, of the corner and of each other."""
+    part, open_holes = c.element, [hole for hole in c.joint.member.holes if not hole.bolted]
+    for hole in open_holes:
+        gage, radius = part.t - hole.y, hole.across / 2
+        if not part.t + radius <= gage <= part.other_leg - radius or hole.x + radius > c.joint.member.end.x0:
+            raise InputError(f"other_leg_holes: a hole at x = {units.fraction(hole.x)} in, y = {units.fraction(gage)} in is not within the outstanding "
+                             f"leg of {units.fraction(part.other_leg)} in")
+    tight = tightest_pair(open_holes)
+    if tight and tight.clear < c.size.d - 1e-9:
+        raise InputError(f"other_leg_holes: two holes are {units.printed(max(tight.clear, 0))} in clear of each other; "
+                         f"at least {units.fraction(c.size.d)} in are needed")
+
+
+def _room_for_plates(c):
+    """A plate beside a web or stem must fit between, or stay clear of, the flanges; on a channel's back it need not."""
+    part = c.element
+    if part.name not in ("web", "stem") or (part.series in ("C", "MC") and c.inputs.plates == 1):
+        return
+    lo = c.joint.pattern[0].y - c.joint.plate_pattern[0].y
+    hi = lo + c.joint.plate.width
+    if lo < -1e-9 or (part.name == "web" and hi > part.width + 1e-9):
+        raise InputError(f"plate_width = {units.fraction(c.joint.plate.width)} in: the plate overlaps a flange of {part.member}; beside the "
+                         f"{part.name} there is room for {units.fraction(part.width)} in, and plate_offset shifts the plate")
 
 
 def _eccentricity(c):
