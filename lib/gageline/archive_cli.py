@@ -5,6 +5,8 @@ from typing import Annotated
 
 import typer
 
+from .terminal import console, progress
+
 Notebook = Annotated[Path, typer.Argument(help="the calculation's notebook")]
 Who = Annotated[str, typer.Option("--who", help="name or initials, as they stand in the title block")]
 
@@ -92,7 +94,6 @@ def issue(notebook: Notebook, rev: Annotated[str | None, typer.Option("--rev", h
           profile: Annotated[str | None, typer.Option("--profile", help="working or record")] = None):
     """Freeze a revision: PDF and record in the reports folder, never overwritten."""
     from .archive import issuing
-    from .cli import progress
 
     say, done = progress()
     try:
@@ -118,8 +119,6 @@ def register(project: Annotated[Path, typer.Argument(help="the project's folder,
     else:
         from rich.markup import escape
         from rich.table import Table
-
-        from .cli import console
 
         shown = [name for name in made.COLUMNS if name not in ("issued as", "program", "file", "sha256")]
         table = Table(*shown, box=None, pad_edge=False)
@@ -178,7 +177,21 @@ def void(pdf: Annotated[Path, typer.Argument(help="an issued PDF")], reason: Ann
     typer.echo(f"{record['mark']} revision {record['rev']} is void: {reason}")
 
 
-VERBS = (sign, comment, answer, close, settle, review, issue, register, verify, compare, void)
+def bind(project: Annotated[Path, typer.Argument(help="the project's folder")],
+         out: Annotated[Path | None, typer.Option("--out", "-o", help="the PDF to write; by default <project>-set.pdf in preview/")] = None):
+    """Bind the issued calculations of a project into one PDF with a cover, an index and continuous sheet numbers."""
+    from .archive import binding, records
+    from .sheet import write_pdf
+
+    pdf, bound = binding.bind(project)
+    if out is None:
+        out = records.reports_folder(project) / "preview" / f"{project.resolve().name}-set.pdf"
+        out.parent.mkdir(exist_ok=True)
+    write_pdf(out, pdf)
+    typer.echo(f"{len(bound)} calculations bound: {out}")
+
+
+VERBS = (sign, comment, answer, close, settle, review, issue, register, verify, compare, void, bind)
 
 
 def add_to(app):

@@ -8,6 +8,7 @@ import typer
 
 from . import __version__, archive_cli, schedule_cli
 from .errors import GagelineError
+from .terminal import console, progress
 
 app = typer.Typer(add_completion=False, no_args_is_help=True, pretty_exceptions_enable=False, rich_markup_mode=None,
                   help="Calculation reports for steel tension members and their end connections.")
@@ -132,17 +133,6 @@ def overrides(pairs):
     return out
 
 
-def progress():
-    """Return (say, done) of a one-line progress display on a terminal's stderr; silent elsewhere."""
-    if not sys.stderr.isatty():
-        return (lambda text: None), (lambda: None)
-    from rich.console import Console
-
-    status = Console(stderr=True).status("starting")
-    status.start()
-    return status.update, status.stop
-
-
 def _told(path, calc):
     from .presenting import ratio
 
@@ -164,13 +154,6 @@ def _print_summary(connection):
         if not each.applies:
             table.add_row(each.title, each.clause, "", "", "–", each.reason, style="dim")
     console().print(table)
-
-
-def console():
-    """Return the terminal to print tables on; 140 columns wide where it is none."""
-    from rich.console import Console
-
-    return Console(width=None if sys.stdout.isatty() else 140)
 
 
 def main():

@@ -124,7 +124,9 @@ class Formula:
         functools.update_wrapper(self, function)
         self.clause = dict.fromkeys(EDITIONS, clause) if isinstance(clause, str) else dict(clause)
         self._source = textwrap.dedent(inspect.getsource(function))
+        self._first_line = function.__code__.co_firstlineno
         tree = ast.parse(self._source).body[0]
+        self._def_line = tree.lineno
         self.arguments = tuple(argument.arg for argument in tree.args.args)
         self.where = f"{function.__module__}.{function.__name__}"
         self.body = tuple(self._read(tree))
@@ -132,7 +134,9 @@ class Formula:
         self._bare = self._compile(tree)
 
     def _refuse(self, node, why):
-        raise FormulaError(f"{self.where}, body line {getattr(node, 'lineno', '?')}: {why}: {ast.unparse(node)}")
+        # ast.arguments has no line of its own; it stands on the function's.
+        line = self._first_line + getattr(node, "lineno", self._def_line) - 1
+        raise FormulaError(f"{self.where}, line {line}: {why}: {ast.unparse(node)}")
 
     def _read(self, tree):
         if tree.args.vararg or tree.args.kwarg or tree.args.kwonlyargs or tree.args.defaults:

@@ -9,7 +9,7 @@ from .. import units
 from ..errors import InputError, NotInTable
 from ..facts import shapes
 from ..geometry import Attachment
-from ..provisions import tension
+from ..provisions import shear_lag
 
 WAYS = {
     **dict.fromkeys(("W", "M", "S", "HP"), ("both flanges", "web")),
@@ -143,7 +143,7 @@ def _flanges(shape, way, gap):
     mid = shape.b_f / 2
     return Element(shape.name, shape.series, "flange", 2, 2, 1, shape.b_f, shape.t_f, None, (stem,),
                    (mid - shape.t_w / 2, mid + shape.t_w / 2), shape.A, 2 * shape.b_f * shape.t_f,
-                   lambda do: do(tension.eccentricity_of_half_section, shape.d, shape.Z_x, shape.A), "7 flange",
+                   lambda do: do(shear_lag.eccentricity_of_half_section, shape.d, shape.Z_x, shape.A), "7 flange",
                    shape.b_f >= 2 / 3 * shape.d, r, r_name, mid, shape, ("lower flange tip", "upper flange tip"))
 
 
@@ -162,7 +162,7 @@ def _web(shape, way, gap):
     flanges = (Attachment(0.0, beyond, shape.t_w, "lower flange"), Attachment(clear, beyond, shape.t_w, "upper flange"))
     r, r_name = _least_radius(shape, [("r_x", shape.r_x), ("r_y", shape.r_y)])
     channel = shape.series in ("C", "MC")
-    x_bar = (lambda do: shape.x_bar) if channel else (lambda do: do(tension.eccentricity_of_split_web, shape.Z_y, shape.A))
+    x_bar = (lambda do: shape.x_bar) if channel else (lambda do: do(shear_lag.eccentricity_of_split_web, shape.Z_y, shape.A))
     return Element(shape.name, shape.series, "web", 1, 1, 1, clear, shape.t_w, None, flanges, (0.0, clear), shape.A, clear * shape.t_w,
                    x_bar, "" if channel else "7 web", False, r, r_name, clear / 2, shape, ("lower flange", "upper flange"))
 
@@ -172,7 +172,7 @@ def _stem(shape, way, gap):
     flange = Attachment(0.0, shape.A - depth * shape.t_w, shape.t_w, "flange")
     r, r_name = _least_radius(shape, [("r_x", shape.r_x), ("r_y", shape.r_y)])
     return Element(shape.name, shape.series, "stem", 1, 1, 1, depth, shape.t_w, shape.t_f, (flange,), (0.0,), shape.A, depth * shape.t_w,
-                   lambda do: do(tension.eccentricity_of_split_web, shape.Z_y, shape.A), "7 web", False, r, r_name, None, shape,
+                   lambda do: do(shear_lag.eccentricity_of_split_web, shape.Z_y, shape.A), "7 web", False, r, r_name, None, shape,
                    ("flange", "stem tip"))
 
 

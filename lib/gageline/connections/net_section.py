@@ -9,7 +9,7 @@ import numpy as np
 from ..check import governing
 from ..geometry import chain_through, critical_chains, lines_of
 from ..geometry.pattern import first
-from ..provisions import connecting, tension
+from ..provisions import connecting, shear_lag, tension
 from .joint import DAMAGE
 from .outcome import Outcome, worked
 
@@ -27,7 +27,7 @@ def net_rupture(joint):
 
     def strength(chain, do):
         A_n = net_area(do, chain, element.A_g, element.pieces, holes)
-        U = shear_lag(joint, do)
+        U = shear_lag_factor(joint, do)
         A_e = do(tension.effective_net_area, A_n, U)
         if np.all(chain.n_ahead == 0):
             return do(tension.net_rupture, joint.member.F_u, A_e)
@@ -49,7 +49,7 @@ def plate_rupture(ply):
 
 def plate_chain(do, chain, A_g, ply, holes):
     """Work out the rupture strength of plates on one chain of holes out of a gross area."""
-    A_e = do(tension.effective_net_area, net_area(do, chain, A_g, ply.pieces, holes), do(tension.shear_lag_case_1))
+    A_e = do(tension.effective_net_area, net_area(do, chain, A_g, ply.pieces, holes), do(shear_lag.shear_lag_case_1))
     if np.all(chain.n_ahead == 0):
         return do(connecting.plate_rupture, ply.F_u, A_e)
     do.say(f"The chain lies behind {chain.n_ahead} of the {chain.n_total} bolts.")
@@ -118,7 +118,7 @@ def _like_spaces(spaces):
     return [(s, g, t, number) for (s, g, t), number in sorted(like.items())]
 
 
-def shear_lag(joint, do):
+def shear_lag_factor(joint, do):
     """Work out U: every case of Table D3.1 that is permitted, the area ratio, the largest of them taken."""
     element, rows = joint.element, joint.rows
     if joint.U_by_hand is not None:
@@ -126,28 +126,28 @@ def shear_lag(joint, do):
         return joint.U_by_hand
     if element.eccentricity is None:
         do.say("Table D3.1 case 1: the load goes directly into the whole cross-section.")
-        return do(tension.shear_lag_case_1)
+        return do(shear_lag.shear_lag_case_1)
     x_bar = element.eccentricity(do)
     do.say(f"Table D3.1 case 2: the load enters through the {element.name} only.")
-    U_2 = do(tension.shear_lag_case_2, x_bar, joint.length)
-    U_A = do(tension.connected_area_ratio, element.A_c, element.A_g)
+    U_2 = do(shear_lag.shear_lag_case_2, x_bar, joint.length)
+    U_A = do(shear_lag.connected_area_ratio, element.A_c, element.A_g)
     if element.case == "7 flange" and rows >= 3:
         do.say(f"Case 7 is permitted too: {rows} bolts in line, $b_f$ {'at least' if element.wide_flange else 'less than'} two thirds of $d$; "
                "the largest value is taken.")
-        U_7 = do(tension.shear_lag_case_7_wide_flange if element.wide_flange else tension.shear_lag_case_7_narrow_flange)
-        return do(tension.largest_of_cases_2_and_7, U_2, U_7, U_A)
+        U_7 = do(shear_lag.shear_lag_case_7_wide_flange if element.wide_flange else shear_lag.shear_lag_case_7_narrow_flange)
+        return do(shear_lag.largest_of_cases_2_and_7, U_2, U_7, U_A)
     if element.case == "7 web" and rows >= 4:
         do.say(f"Case 7 is permitted too: {rows} bolts in line in the {element.name}; the largest value is taken.")
-        return do(tension.largest_of_cases_2_and_7, U_2, do(tension.shear_lag_case_7_web), U_A)
+        return do(shear_lag.largest_of_cases_2_and_7, U_2, do(shear_lag.shear_lag_case_7_web), U_A)
     if element.case == "8" and rows >= 3:
         do.say(f"Case 8 is permitted too: {rows} bolts in line; the largest value is taken.")
-        U_8 = do(tension.shear_lag_case_8_four_bolts if rows >= 4 else tension.shear_lag_case_8_three_bolts)
-        return do(tension.largest_of_cases_2_and_8, U_2, U_8, U_A)
+        U_8 = do(shear_lag.shear_lag_case_8_four_bolts if rows >= 4 else shear_lag.shear_lag_case_8_three_bolts)
+        return do(shear_lag.largest_of_cases_2_and_8, U_2, U_8, U_A)
     why = {"7 flange": "case 7 needs at least 3 bolts in line", "7 web": "case 7 needs at least 4 bolts in line",
            "8": "case 8 needs at least 3 bolts in line"}.get(element.case)
     if why:
         do.say(f"{why[0].upper()}{why[1:]}; there are {rows}.")
-    return do(tension.largest_of_case_2, U_2, U_A)
+    return do(shear_lag.largest_of_case_2, U_2, U_A)
 
 
 def chain_name(chain):

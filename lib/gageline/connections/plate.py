@@ -8,7 +8,7 @@ from ..check import governing
 from ..facts.grades import E
 from ..geometry.pattern import first
 from ..geometry.whitmore import whitmore
-from ..provisions import connecting, tension
+from ..provisions import connecting, shear_lag, tension
 from . import net_section
 from .outcome import Outcome, worked
 
@@ -83,7 +83,7 @@ def width_rupture(ply, found):
     inside = [hole for hole in ply.bolted if first(found.y_lo) - hole.across / 2 < first(hole.y) < first(found.y_hi) + hole.across / 2]
     if not inside:
         whole = worked(lambda do: do(connecting.plate_rupture, ply.F_u,
-                                     do(tension.effective_net_area, whitmore_area(do, ply, found), do(tension.shear_lag_case_1))))
+                                     do(tension.effective_net_area, whitmore_area(do, ply, found), do(shear_lag.shear_lag_case_1))))
         return _with_path(whole, found)
 
     def strength(chain, do):

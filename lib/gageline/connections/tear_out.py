@@ -7,7 +7,8 @@ import numpy as np
 
 from ..check import governing, silent
 from ..geometry import Part, tear_out_blocks
-from ..provisions import connecting, tension
+from ..provisions import block_shear as rules
+from ..provisions import tension
 from .joint import DAMAGE
 from .outcome import Outcome
 
@@ -23,7 +24,7 @@ def block_shear(ply, part):
         scalar = not isinstance(block.A_gv, np.ndarray)
         if not scalar:
             n = ply.pieces
-            return do(connecting.block_shear, ply.F_u, n * block.A_nv, U_BS, n * block.A_nt, ply.F_y, n * block.A_gv)
+            return do(rules.block_shear, ply.F_u, n * block.A_nv, U_BS, n * block.A_nt, ply.F_y, n * block.A_gv)
         return _written_out(do, block, ply)
 
     nominal, block, steps = governing(blocks, strength)
@@ -41,27 +42,27 @@ def _written_out(do, block, ply):
     d_along = do(tension.hole_width, ply.hole.along, DAMAGE)
     for (length, t, n_holes), number in sorted(planes.items()):
         n_v = ply.pieces * number
-        A_gv = do(connecting.first_shear_planes, n_v, length, t) if A_gv is None else do(connecting.more_shear_planes, A_gv, n_v, length, t)
+        A_gv = do(rules.first_shear_planes, n_v, length, t) if A_gv is None else do(rules.more_shear_planes, A_gv, n_v, length, t)
         if not n_holes:
             continue
         lost = n_v * n_holes
-        A_hv = do(connecting.first_shear_plane_holes, lost, d_along, t) if A_hv is None else \
-            do(connecting.more_shear_plane_holes, A_hv, lost, d_along, t)
-    A_nv = do(connecting.net_shear_area, A_gv, A_hv or 0.0)
+        A_hv = do(rules.first_shear_plane_holes, lost, d_along, t) if A_hv is None else \
+            do(rules.more_shear_plane_holes, A_hv, lost, d_along, t)
+    A_nv = do(rules.net_shear_area, A_gv, A_hv or 0.0)
     across = sum(plane.n_holes for plane in block.tension)
     width = sum(plane.y1 - plane.y0 for plane in block.tension)
     attached = block.A_gt - width * ply.t
     if attached > 1e-9:
-        A_gt = do(connecting.gross_tension_area_with_attached, ply.pieces, width, ply.t, attached)
+        A_gt = do(rules.gross_tension_area_with_attached, ply.pieces, width, ply.t, attached)
     else:
-        A_gt = do(connecting.gross_tension_area, ply.pieces, width, ply.t)
+        A_gt = do(rules.gross_tension_area, ply.pieces, width, ply.t)
     if across:
         d_across = do(tension.hole_width, ply.hole.across, DAMAGE) if ply.hole.across != ply.hole.along else d_along
-        A_ht = do(connecting.tension_plane_holes, ply.pieces * across, d_across, ply.t)
+        A_ht = do(rules.tension_plane_holes, ply.pieces * across, d_across, ply.t)
     else:
         A_ht = 0.0
-    A_nt = do(connecting.net_tension_area, A_gt, A_ht)
-    return do(connecting.block_shear, ply.F_u, A_nv, U_BS, A_nt, ply.F_y, A_gv)
+    A_nt = do(rules.net_tension_area, A_gt, A_ht)
+    return do(rules.block_shear, ply.F_u, A_nv, U_BS, A_nt, ply.F_y, A_gv)
 
 
 def member_part(joint):

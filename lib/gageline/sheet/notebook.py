@@ -41,6 +41,14 @@ def collect(notebook):
     return placed
 
 
+def as_notebook(blocks):
+    """Return blocks as an executed notebook of one cell, for documents that no notebook was written for."""
+    bundle = {SHEET_MIME: {"blocks": list(blocks)}}
+    cell = {"cell_type": "code", "id": "blocks", "metadata": {}, "source": "", "execution_count": 1,
+            "outputs": [{"output_type": "display_data", "metadata": {}, "data": bundle}]}
+    return {"nbformat": 4, "nbformat_minor": 5, "metadata": {}, "cells": [cell]}
+
+
 def source_text(notebook):
     """Return the notebook as text without outputs and run times, so that the same calc always gives the same text."""
     cells = []

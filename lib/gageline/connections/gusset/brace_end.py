@@ -4,7 +4,7 @@ from dataclasses import dataclass
 
 from ...facts.grades import E
 from ...geometry import Block, ShearPlane, TensionPlane, Whitmore, spread_width
-from ...provisions import connecting, gusset_plates, welds
+from ...provisions import block_shear, gusset_plates, welds
 from .. import plate
 from ..outcome import Outcome, worked
 from ..tear_out import U_BS
@@ -74,7 +74,7 @@ def welded_block(ply, brace_welds, axis, free):
         A_gv = do(gusset_plates.area_along_brace_welds, brace_welds.l, ply.t)
         A_nt = do(gusset_plates.area_between_brace_welds, brace_welds.g, ply.t)
         A_nv = do(welds.net_area_without_holes, A_gv)
-        return do(connecting.block_shear, ply.F_u, A_nv, U_BS, A_nt, ply.F_y, A_gv)
+        return do(block_shear.block_shear, ply.F_u, A_nv, U_BS, A_nt, ply.F_y, A_gv)
 
     y0, y1 = axis - brace_welds.g / 2, axis + brace_welds.g / 2
     # Seen mirrored, as every plate: its free edge at larger x.

@@ -9,7 +9,7 @@ import numpy as np
 
 from ...check import FACTORS, silent
 from ...facts.grades import E
-from ...provisions import beam, connecting, gusset_edges, gusset_plates, gussets, welds
+from ...provisions import beam, block_shear, connecting, gusset_edges, gusset_plates, gussets, welds
 from ..outcome import worked
 
 FILLETS = 2
@@ -235,7 +235,7 @@ def support_rupture(edges, edge):
                "beside both fillets.")
         f_w, *_ = force_per_length(silent, edges, edge)
         F_w = do(gusset_edges.whole_edge_force, f_w, edge.L)
-        A_nv = do(welds.net_area_without_holes, do(connecting.first_shear_planes, FILLETS, edge.L, edge.support.t))
+        A_nv = do(welds.net_area_without_holes, do(block_shear.first_shear_planes, FILLETS, edge.L, edge.support.t))
         return _refer(do, edges, do(welds.shear_rupture, edge.support.F_u, A_nv), F_w, "as above")
 
     return worked(compute)

@@ -6,7 +6,7 @@
 import numpy as np
 
 from ...check import FACTORS, Working, silent
-from ...provisions import bolt_tension, connecting, prying, prying_strength, tension, welds
+from ...provisions import block_shear, bolt_tension, prying, prying_strength, tension, welds
 from ...provisions import bolts as bolt_rules
 from .. import bolt_group
 from ..joint import DAMAGE
@@ -177,11 +177,11 @@ def flange_shear(h, side, rupture):
     def compute(do):
         if side == "beam":
             do.say("Of the beam's flange only the length of the fitting is counted, which is safe.")
-        A_gv = do(connecting.first_shear_planes, 2, h.length, t)
+        A_gv = do(block_shear.first_shear_planes, 2, h.length, t)
         if not rupture:
             return do(welds.shear_yielding, part.F_y, A_gv)
         d_n = do(tension.hole_width, ply.hole.along, DAMAGE)
-        A_hv = do(connecting.first_shear_plane_holes, h.n, d_n, t)
-        return do(welds.shear_rupture, part.F_u, do(connecting.net_shear_area, A_gv, A_hv))
+        A_hv = do(block_shear.first_shear_plane_holes, h.n, d_n, t)
+        return do(welds.shear_rupture, part.F_u, do(block_shear.net_shear_area, A_gv, A_hv))
 
     return worked(compute)

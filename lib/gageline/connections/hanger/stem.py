@@ -2,7 +2,7 @@
 
 from ...check import governing
 from ...geometry import Part
-from ...provisions import connecting, hanger, tension, welded_ends, welds
+from ...provisions import block_shear, connecting, hanger, shear_lag, tension, welded_ends, welds
 from .. import net_section, tear_out
 from ..joint import DAMAGE
 from ..outcome import Outcome, worked
@@ -31,7 +31,7 @@ def member_rupture(h):
         else:
             do.say("Table D3.1 case 4: longitudinal welds only.")
             U_4 = do(welded_ends.shear_lag_case_4, l_w, part.width, part.eccentricity(do))
-            U = do(welded_ends.largest_of_case_4, U_4, do(tension.connected_area_ratio, part.A_c, part.A_g))
+            U = do(welded_ends.largest_of_case_4, U_4, do(shear_lag.connected_area_ratio, part.A_c, part.A_g))
         return do(tension.net_rupture, h.hung.F_u, do(tension.effective_net_area, A_n, U))
 
     return worked(compute)
@@ -67,7 +67,7 @@ def along_welds(h, part, rupture):
     def compute(do):
         if part == "stem" and h.welds.pieces == 2:
             do.say("The welds on both faces of the stem share its two planes.")
-        A_gv = do(connecting.first_shear_planes, n_v, h.welds.length, t)
+        A_gv = do(block_shear.first_shear_planes, n_v, h.welds.length, t)
         if rupture:
             return do(welds.shear_rupture, F_u, do(welds.net_area_without_holes, A_gv))
         return do(welds.shear_yielding, F_y, A_gv)
@@ -104,7 +104,7 @@ def stem_rupture(h):
             do.say("At the flange the stem has no holes; the section through the last row is checked on the Whitmore width.")
             return do(hanger.stem_rupture_inclined, fit.F_u, do(welded_ends.net_area_of_unholed_member, A_g), h.psi, fit.k, h.length)
         A_n = _holes(do, h, A_g) if h.lower else do(welded_ends.net_area_of_unholed_member, A_g)
-        return do(connecting.plate_rupture, fit.F_u, do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1)))
+        return do(connecting.plate_rupture, fit.F_u, do(tension.effective_net_area, A_n, do(shear_lag.shear_lag_case_1)))
 
     return worked(compute)
 
@@ -130,7 +130,7 @@ def whitmore_rupture(h):
     def compute(do):
         A_g = _spread(do, h)
         A_n = _holes(do, h, A_g) if h.lower else do(welded_ends.net_area_of_unholed_member, A_g)
-        return do(connecting.plate_rupture, h.fitting.F_u, do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1)))
+        return do(connecting.plate_rupture, h.fitting.F_u, do(tension.effective_net_area, A_n, do(shear_lag.shear_lag_case_1)))
 
     return worked(compute)
 
@@ -154,9 +154,9 @@ def stem_block(h):
     def strength(name, do):
         n_v, width = blocks[name]
         do.say(f"Block {name}.")
-        A_gv = do(connecting.first_shear_planes, n_v, l_w, fit.t_s)
-        A_nt = do(connecting.net_tension_area, do(connecting.gross_tension_area, 1, width(), fit.t_s), 0.0)
-        return do(connecting.block_shear, fit.F_u, do(welds.net_area_without_holes, A_gv), tear_out.U_BS, A_nt, fit.F_y, A_gv)
+        A_gv = do(block_shear.first_shear_planes, n_v, l_w, fit.t_s)
+        A_nt = do(block_shear.net_tension_area, do(block_shear.gross_tension_area, 1, width(), fit.t_s), 0.0)
+        return do(block_shear.block_shear, fit.F_u, do(welds.net_area_without_holes, A_gv), tear_out.U_BS, A_nt, fit.F_y, A_gv)
 
     nominal, name, steps = governing(list(blocks), strength)
     return Outcome(nominal, steps, name)

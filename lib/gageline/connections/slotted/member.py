@@ -2,7 +2,7 @@
 
 import numpy as np
 
-from ...provisions import connecting, hollow, reinforcement, slots, tension, welds
+from ...provisions import block_shear, hollow, reinforcement, slots, tension, welds
 from ..outcome import worked
 from .joint import FREE_GAP
 
@@ -175,8 +175,8 @@ def plate_block(joint):
 
     def compute(do):
         do.say("Sheared along both weld lines, torn across between them at the end of the tube; no holes, so net areas equal gross areas.")
-        A_gv = do(connecting.first_shear_planes, 2, joint.l, plate.t)
-        A_nt = do(connecting.gross_tension_area, 1, joint.spacing, plate.t)
-        return do(connecting.block_shear, plate.F_u, A_gv, 1.0, A_nt, plate.F_y, A_gv)
+        A_gv = do(block_shear.first_shear_planes, 2, joint.l, plate.t)
+        A_nt = do(block_shear.gross_tension_area, 1, joint.spacing, plate.t)
+        return do(block_shear.block_shear, plate.F_u, A_gv, 1.0, A_nt, plate.F_y, A_gv)
 
     return worked(compute)

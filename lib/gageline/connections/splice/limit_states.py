@@ -2,7 +2,7 @@
 
 from ...check import Working, silent
 from ...geometry import Part
-from ...provisions import connecting, splices, tension
+from ...provisions import connecting, shear_lag, splices, tension
 from .. import bolt_group, net_section, plate, tear_out
 from ..joint import DAMAGE
 from ..outcome import Outcome, worked
@@ -30,7 +30,7 @@ def member_rupture(splice):
             number = joint.n_lines * ply.pieces
             A_h = do(tension.first_hole_loss, number, d_n, ply.t) if A_h is None else do(tension.hole_loss, A_h, number, d_n, ply.t)
         A_n = do(tension.net_area_straight, splice.A_g, A_h)
-        return do(tension.net_rupture, splice.F_u, do(tension.effective_net_area, A_n, do(tension.shear_lag_case_1)))
+        return do(tension.net_rupture, splice.F_u, do(tension.effective_net_area, A_n, do(shear_lag.shear_lag_case_1)))
 
     return worked(compute)
 

@@ -5,7 +5,8 @@ from dataclasses import dataclass
 import numpy as np
 
 from ...check import governing
-from ...provisions import connecting, tension, welded_ends, welds
+from ...provisions import block_shear as blocks
+from ...provisions import connecting, shear_lag, tension, welded_ends, welds
 from .. import weld_group
 from ..outcome import Outcome, worked
 
@@ -59,7 +60,7 @@ def net_area_and_shear_lag(end, do):
     if element.eccentricity is None:
         if end.across:
             do.say("Table D3.1 case 1: the load goes directly into the whole cross-section.")
-            return A_n, do(tension.shear_lag_case_1)
+            return A_n, do(shear_lag.shear_lag_case_1)
         do.say("Table D3.1 case 4: a plate with longitudinal welds only.")
         return A_n, do(welded_ends.shear_lag_case_4_plate, length(end, do), end.member.width)
     if end.across:
@@ -67,9 +68,9 @@ def net_area_and_shear_lag(end, do):
     else:
         do.say(f"Table D3.1 case 4: longitudinal welds only, through the {element.name} only; $w$ is the width of the {element.name}.")
     x_bar, l = element.eccentricity(do), length(end, do)
-    U = do(tension.shear_lag_case_2, x_bar, l) if end.across else do(welded_ends.shear_lag_case_4, l, connected_width(end), x_bar)
-    U_A = do(tension.connected_area_ratio, element.A_c, element.A_g)
-    return A_n, do(tension.largest_of_case_2 if end.across else welded_ends.largest_of_case_4, U, U_A)
+    U = do(shear_lag.shear_lag_case_2, x_bar, l) if end.across else do(welded_ends.shear_lag_case_4, l, connected_width(end), x_bar)
+    U_A = do(shear_lag.connected_area_ratio, element.A_c, element.A_g)
+    return A_n, do(shear_lag.largest_of_case_2 if end.across else welded_ends.largest_of_case_4, U, U_A)
 
 
 def connected_width(end):
@@ -90,8 +91,8 @@ def weld_strength(end):
 
 def _shear_area(end, part, do):
     if end.equal:
-        return do(connecting.first_shear_planes, 2 * part.pieces, end.l_1, part.t)
-    return do(connecting.more_shear_planes, do(connecting.first_shear_planes, part.pieces, end.l_1, part.t), part.pieces, end.l_2, part.t)
+        return do(blocks.first_shear_planes, 2 * part.pieces, end.l_1, part.t)
+    return do(blocks.more_shear_planes, do(blocks.first_shear_planes, part.pieces, end.l_1, part.t), part.pieces, end.l_2, part.t)
 
 
 def yielding_along_welds(end, part):
@@ -173,15 +174,15 @@ def block_shear(end, part, tears):
         A_gv = None
         for t, long in _like(tear.planes):
             n = part.pieces * sum(1 for plane in tear.planes if plane[0] is t and plane[1] is long)
-            A_gv = do(connecting.first_shear_planes, n, long, t) if A_gv is None else do(connecting.more_shear_planes, A_gv, n, long, t)
+            A_gv = do(blocks.first_shear_planes, n, long, t) if A_gv is None else do(blocks.more_shear_planes, A_gv, n, long, t)
         w = sum(b - a for a, b in tear.spans)
         if tear.attached:
-            A_gt = do(connecting.gross_tension_area_with_attached, part.pieces, w, part.t, tear.attached)
+            A_gt = do(blocks.gross_tension_area_with_attached, part.pieces, w, part.t, tear.attached)
         else:
-            A_gt = do(connecting.gross_tension_area, part.pieces, w, part.t)
+            A_gt = do(blocks.gross_tension_area, part.pieces, w, part.t)
         A_nv = do(welds.net_area_without_holes, A_gv)
         A_nt = do(welds.net_tension_area_without_holes, A_gt)
-        return do(connecting.block_shear, part.F_u, A_nv, 1.0, A_nt, part.F_y, A_gv)
+        return do(blocks.block_shear, part.F_u, A_nv, 1.0, A_nt, part.F_y, A_gv)
 
     nominal, tear, steps = governing(tears, strength)
     notes = () if tear is None else (f"Block that governs: {tear.label}; no holes, so net areas are gross areas.",)
@@ -212,7 +213,7 @@ def plate_rupture(end):
             do.say("The plate is welded along its edges only: Table D3.1 case 4, plate.")
             U = do(welded_ends.shear_lag_case_4_plate, length(end, do), part.width)
         else:
-            U = do(tension.shear_lag_case_1)
+            U = do(shear_lag.shear_lag_case_1)
         return do(connecting.plate_rupture, part.F_u, do(tension.effective_net_area, A_n, U))
 
     return worked(compute)
