@@ -71,7 +71,8 @@ def review(notebook: Notebook):
     log = found.calc.log
     for role in signoffs.ROLES:
         event = found.signed(role)
-        typer.echo(f"{role}: {event['who']}, {event['when']}" + (f", {event['method']}" if event["method"] else "") if event else f"{role}: not signed")
+        how = f", {event['method']}" if event and event["method"] else ""
+        typer.echo(f"{role}: {event['who']}, {event['when']}{how}" if event else f"{role}: not signed")
     for event in log.voided(found.content, found.notebook):
         typer.echo(f"void: {event['role']} {event['who']}, {event['when']}: inputs, results or the notebook's text have changed since")
     for each in log.comments():
@@ -191,7 +192,22 @@ def bind(project: Annotated[Path, typer.Argument(help="the project's folder")],
     typer.echo(f"{len(bound)} calculations bound: {out}")
 
 
-VERBS = (sign, comment, answer, close, settle, review, issue, register, verify, compare, void, bind)
+def manual(out: Annotated[Path, typer.Option("--out", "-o", help="the PDF to write")] = Path("verification-manual.pdf"),
+           date: Annotated[str | None, typer.Option("--date", help="date that it bears, as 2026-12-01; by default today's")] = None):
+    """Work out every published case with the installed version and set it beside what its source prints."""
+    import datetime
+
+    from .archive import manual as made
+    from .sheet import write_pdf
+
+    pdf, number, count, wrong = made.manual(date or datetime.date.today().isoformat())
+    write_pdf(out, pdf)
+    typer.echo(f"{number}: {count} numbers compared, {wrong} outside the difference allowed: {out}")
+    if wrong:
+        raise typer.Exit(1)
+
+
+VERBS = (sign, comment, answer, close, settle, review, issue, register, verify, compare, void, bind, manual)
 
 
 def add_to(app):

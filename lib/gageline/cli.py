@@ -56,14 +56,47 @@ def report(notebook: Notebook, set_: Set = [], out: Annotated[Path | None, typer
 @app.command()
 def quick(notebook: Notebook, set_: Set = []):  # noqa: B006
     """Compute one calculation from its inputs alone and print its summary; no notebook is run, no PDF made."""
-    from . import cells, running
-    from .calc import Calc
-    from .project import find
+    _print_summary(_calc(notebook, set_).connection)
 
-    book = running.read_notebook(notebook)
-    given = cells.inputs_of_notebook(book)
-    given = cells.merged(given, {name: cells.Given(value, "") for name, value in overrides(set_).items()})
-    _print_summary(Calc(running.family_of(book, notebook), given, find(notebook.resolve().parent)).connection)
+
+@app.command()
+def search(notebook: Notebook, vary: Annotated[list[str], typer.Option("--vary", help="values of an input: rows=2,3,4 or 'pitch=2 in:4 in:1/4 in'")],
+           objective: Annotated[str, typer.Option(help="fewest bolts, shortest connection, least plate weight or least member weight")] = "fewest bolts",
+           most: Annotated[int, typer.Option(help="how many layouts to list")] = 10,
+           plot: Annotated[Path | None, typer.Option(help="write the Pareto set of bolts against plate weight as SVG")] = None):
+    """Find every bolted layout that satisfies all checks, and print the best with the inputs cell of the winner."""
+    from . import cells, running, searching
+
+    given = cells.inputs_of_notebook(running.read_notebook(notebook))
+    typer.echo(searching.told({name: each.value for name, each in given.items()}, notebook.resolve().parent, vary, objective, most, plot))
+
+
+@app.command()
+def margins(notebook: Notebook, set_: Set = []):  # noqa: B006
+    """Print how far each input may drift before D/C reaches 1.00, and which check governs there."""
+    from rich.table import Table
+
+    from . import margins as room
+
+    table = Table("input", "value", "down to", "where", "up to", "where", box=None, pad_edge=False)
+    for each in room.margins(_calc(notebook, set_).connection):
+        table.add_row(each.name, f"{each.value:.6g} {each.unit}", room.said(each, "lower"), each.lower_why, room.said(each, "upper"), each.upper_why)
+    console().print(table)
+
+
+@app.command()
+def built(notebook: Notebook, set_: Set):
+    """Print the strength of what was built against what was designed; --set gives what was measured, for example 'missing_bolts=[3]'."""
+    from rich.table import Table
+
+    from . import margins as room
+
+    designed, as_built = _calc(notebook, []).connection, _calc(notebook, set_).connection
+    table = Table("check", "designed, kip", "built, kip", "change", "D/C designed", "D/C built", box=None, pad_edge=False)
+    for title, before, after, change, old, new in room.against_design(as_built, designed):
+        table.add_row(title, f"{before:.4g}", f"{after:.4g}", f"{change:+.1f} %", f"{old:.3f}", f"{new:.3f}")
+    console().print(table)
+    typer.echo(f"As built: {'OK' if as_built.ok else 'N.G.'}")
 
 
 @app.command()
@@ -115,6 +148,18 @@ archive_cli.add_to(app)
 app.command()(schedule_cli.schedule)
 
 
+def _calc(notebook, set_):
+    """Return the calculation of a notebook's inputs, computed without running it."""
+    from . import cells, running
+    from .calc import Calc
+    from .project import find
+
+    book = running.read_notebook(notebook)
+    given = cells.inputs_of_notebook(book)
+    given = cells.merged(given, {name: cells.Given(value, "") for name, value in overrides(set_).items()})
+    return Calc(running.family_of(book, notebook), given, find(notebook.resolve().parent))
+
+
 def overrides(pairs):
     """Return name -> value of ``name=value`` texts; numbers and True/False are read as such, everything else is text."""
     import ast
@@ -160,9 +205,11 @@ def main():
     """Run the command line; errors of ours are one sentence on stderr and exit code 1."""
     debug = "--debug" in sys.argv
     try:
-        # typer turns a Ctrl-C into an exit code, which without its standalone mode is what it returns.
-        if app(standalone_mode=False) == 130:
+        # Without its standalone mode typer returns the exit code, that of a Ctrl-C too.
+        code = app(standalone_mode=False)
+        if code == 130:
             raise KeyboardInterrupt
+        sys.exit(code if isinstance(code, int) else 0)
     except GagelineError as error:
         if debug:
             raise

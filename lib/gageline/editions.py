@@ -5,20 +5,25 @@ from dataclasses import dataclass
 from .check import METHODS
 from .errors import InputError
 from .formula import EDITIONS
+from .units import SYSTEMS
 
 LOADS = ("7-22", "7-16")
 
 
 @dataclass(frozen=True)
 class Basis:
-    """What a project fixes for all its calculations: specification edition, method, loads standard."""
+    """What a project fixes for all its calculations: specification edition, method, loads standard, units of print.
+
+    With ``units_system`` "SI" the specification's own metric constants hold; "dual" prints both and keeps the inch constants.
+    """
 
     edition: str = "360-22"
     method: str = "LRFD"
     loads: str = "7-22"
+    units_system: str = "US"
 
     def __post_init__(self):
-        for name, allowed in (("edition", EDITIONS), ("method", METHODS), ("loads", LOADS)):
+        for name, allowed in (("edition", EDITIONS), ("method", METHODS), ("loads", LOADS), ("units_system", SYSTEMS)):
             if getattr(self, name) not in allowed:
                 raise InputError(f"{name} = {getattr(self, name)!r} is not known; allowed: {', '.join(allowed)}")
 

@@ -110,11 +110,11 @@ class Line:
         """Name of the quantity computed."""
         return self.body.symbol
 
-    def rendered(self):
-        """Return the printed line: LaTeX rows, plain-text reading and the numbers as printed (see ``render.Rendered``)."""
+    def rendered(self, system="US"):
+        """Return the line as printed in a system of units: LaTeX rows, plain-text reading, printed numbers (see ``render.Rendered``)."""
         from .render import render_line
 
-        return render_line(self)
+        return render_line(self, system)
 
 
 class Formula:

@@ -30,6 +30,23 @@ def file_hash(path):
     return hashlib.sha256(Path(path).read_bytes()).hexdigest()
 
 
+def published_cases():
+    """Return the paths of the published cases (TOML): in a wheel inside the package, in a checkout beside the tests; [] in neither."""
+    package = Path(__file__).resolve().parent
+    for root in (package / "_published", package.parents[1] / "tests" / "published"):
+        if found := sorted(root.glob("cases*.toml")):
+            return found
+    return []
+
+
+@functools.cache
+def verification_id():
+    """Return the number of the verification manual that this program and these cases give; empty without cases."""
+    paths = published_cases()
+    digest = hashlib.sha256(program_hash().encode() + b"".join(path.read_bytes() for path in paths))
+    return f"V-{digest.hexdigest()[:12]}" if paths else ""
+
+
 def rows(family):
     """Return the (key, value) rows of a report's program identification."""
     versions = []
@@ -40,6 +57,7 @@ def rows(family):
             versions.append(f"{name} not installed")
     root = templates_root()
     return [("Program", f"gageline {__version__}"), ("Code and tables, SHA-256", program_hash()),
+            ("Verification manual", verification_id() or "published cases are not installed"),
             (f"Shipped template {family}.ipynb, SHA-256", file_hash(root / f"{family}.ipynb")),
             ("Shipped sheet, SHA-256", file_hash(root / "sheet" / "sheet.typ")),
             ("Stands on", ", ".join(versions)), ("Python", f"{platform.python_version()} on {platform.system()} {platform.machine()}"),

@@ -80,7 +80,7 @@ def cover(calc):
                                              "connection, from the gross section to the connection plate.",
         criteria=[["Specification", REFERENCES[job.edition]], ["Method", job.method], ["Loads", REFERENCES[job.loads]],
                   ["Materials", runs_of(connection.materials_text())], ["Units", "kip, inch, ksi"]],
-        scope={"checked": applied, "not_applicable": apart, "by_others": list(connection.by_others())},
+        scope={"checked": applied, "not_applicable": apart, "by_others": list(connection.left_to_others())},
         assumptions=taken, open_items=calc.open_items(), cautions=list(CAUTIONS[:3]),
         revisions=[[job.rev, job.date.isoformat(), job.revision_text, signed["by"], signed["checked"], signed["approved"]]])
 
@@ -211,7 +211,7 @@ def checks(connection, part):
 
 def _within(each):
     """Return a check's title as a heading under its part."""
-    title = each.title if each.part == "bolts" else each.title.partition(", ")[2]
+    title = each.title if each.part == "bolts" or each.unit != "kip" else each.title.partition(", ")[2]
     return title[0].upper() + title[1:]
 
 

@@ -32,6 +32,7 @@ class Project(BaseModel):
     edition: Literal["360-22", "360-16"] = Field(description="specification: 360-22 or 360-16 (AISC)")
     method: Literal["LRFD", "ASD"] = Field(description="LRFD or ASD")
     loads: Literal["7-22", "7-16"] = Field(description="loads standard: 7-22 or 7-16 (ASCE/SEI)")
+    units: Literal["US", "SI", "dual"] = Field("US", description="units of print: US (kip, in), SI (kN, mm, MPa) or dual")
     paper: Literal["us-letter", "a4"] = Field("us-letter", description="us-letter or a4")
     prepared_by: str = Field("", description="who may sign as preparer, names with commas between; empty: anybody")
     checked_by: str = Field("", description="who may sign as checker; empty: anybody but the preparer")
@@ -39,7 +40,7 @@ class Project(BaseModel):
     rev: str = Field("0", description="revision: 0, 1, … or A, B, … before 0", min_length=1, max_length=6)
     date: datetime.date = Field(description="date of the revision, as 2026-12-01")
     revision_text: str = Field("first issue", description="what this revision is")
-    status: Literal[STATUSES] = Field("preliminary", description="status it is issued with: preliminary, for review, for approval or for construction")
+    status: Literal[STATUSES] = Field("preliminary", description="status of an issue: preliminary, for review, for approval or for construction")
     profile: Literal[PROFILES] = Field("working", description="working: PDF/A-3 with its sources attached; record: PDF/A-2, sources beside it")
 
     def allowed(self, role):
@@ -49,8 +50,8 @@ class Project(BaseModel):
 
     @property
     def basis(self):
-        """Edition, method and loads standard."""
-        return Basis(self.edition, self.method, self.loads)
+        """Edition, method, loads standard and units of print."""
+        return Basis(self.edition, self.method, self.loads, self.units)
 
 
 def load(path):

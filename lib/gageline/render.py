@@ -19,9 +19,13 @@ _RESULT_DIGITS = 4
 _MOST_DIGITS = 9
 
 _SPOKEN_UNIT = {"in": "inches", "in²": "square inches", "in³": "cubic inches", "kip": "kips", "ksi": "ksi", "kip/in": "kips per inch",
-                "kip·in": "kip inches", "1/in": "per inch", "rad": "radians", "": ""}
+                "kip·in": "kip inches", "1/in": "per inch", "rad": "radians", "": "",
+                "mm": "millimetres", "mm²": "square millimetres", "mm³": "cubic millimetres", "kN": "kilonewtons", "MPa": "megapascals",
+                "kN/mm": "kilonewtons per millimetre", "kN·m": "kilonewton metres", "1/mm": "per millimetre"}
 _LATEX_UNIT = {"in": r"\text{in}", "in²": r"\text{in}^{2}", "in³": r"\text{in}^{3}", "kip": r"\text{kip}", "ksi": r"\text{ksi}",
-               "kip/in": r"\text{kip/in}", "kip·in": r"\text{kip·in}", "1/in": r"\text{in}^{-1}", "rad": r"\text{rad}", "": ""}
+               "kip/in": r"\text{kip/in}", "kip·in": r"\text{kip·in}", "1/in": r"\text{in}^{-1}", "rad": r"\text{rad}", "": "",
+               "mm": r"\text{mm}", "mm²": r"\text{mm}^{2}", "mm³": r"\text{mm}^{3}", "kN": r"\text{kN}", "MPa": r"\text{MPa}",
+               "kN/mm": r"\text{kN/mm}", "kN·m": r"\text{kN·m}", "1/mm": r"\text{mm}^{-1}"}
 
 
 @dataclass(frozen=True)
@@ -96,49 +100,70 @@ def value_latex(text, unit, base=False):
     return rf"\left({latex}\right)" if base and unit else latex
 
 
-def _numbers(line):
-    """Return printed inputs and result; digits are added to the inputs until they recompute to the printed result."""
+def _numbers(line, system):
+    """Return printed inputs and result; digits are added to the inputs until they recompute to the printed result.
+
+    Printed numbers go back to inch and kip by the exact factors, so the printed units are accounted for (MPa times mm² is N).
+    """
     wanted = SYMBOLS[line.symbol]
-    result = float(line.result)
+    factor, places = _scale(wanted, system)
+    scales = [_scale(SYMBOLS[name], system) for name in line.body.names]
+    result = float(line.result) * factor
     for figures in (_RESULT_DIGITS, 3):
-        printed_result = units.printed(result, figures, wanted.places)
+        printed_result = units.printed(result, figures, places)
         half = 0.5 * 10.0 ** -len(printed_result.partition(".")[2]) * (1 + 1e-6)
         for digits in range(4, _MOST_DIGITS + 1):
-            texts = tuple(units.printed(float(value), digits, SYMBOLS[name].places) for name, value in zip(line.body.names, line.values))
-            again = eval(line.body.code, dict(_NAMESPACE, **{name: float(text) for name, text in zip(line.body.names, texts)}))
+            texts = tuple(units.printed(float(value) * by, digits, least) for value, (by, least) in zip(line.values, scales))
+            back = {name: float(text) / by for name, text, (by, _) in zip(line.body.names, texts, scales)}
+            again = eval(line.body.code, dict(_NAMESPACE, **back)) * factor
             if abs(again - float(printed_result)) <= half:
                 return texts, printed_result
-    return texts, units.printed(result, 3, wanted.places)
+    return texts, units.printed(result, 3, places)
 
 
-def render_line(line):
+def _scale(symbol, system):
+    """Return the factor to the unit printed, and the least decimals: a length in mm needs none."""
+    unit, factor = units.shown_as(symbol.unit, system)
+    return factor, 0 if unit == "mm" else symbol.places
+
+
+def render_line(line, system="US"):
     """Return a formula's computed line rendered for print.
 
     Parameters
     ----------
     line : a ``formula.Line``.
+    system : "US", "SI", or "dual": the US line, its result also in SI in brackets.
     """
     body, wanted = line.body, SYMBOLS[line.symbol]
     template = _template(body)
-    texts, result = _numbers(line)
+    texts, result = _numbers(line, system)
+    shown = {name: units.shown_as(SYMBOLS[name].unit, system)[0] for name in body.names}
+    unit = units.shown_as(wanted.unit, system)[0]
     bases = {name for name in body.names if re.search(rf"{chr(_SLOT + body.names.index(name))}\^", template)}
     symbolic = _fill(template, [SYMBOLS[name].latex for name in body.names], r"\,")
-    filled = [value_latex(text, SYMBOLS[name].unit, name in bases) for text, name in zip(texts, body.names)]
+    filled = [value_latex(text, shown[name], name in bases) for text, name in zip(texts, body.names)]
     numeric = _fill(template, filled, r"\cdot") if body.names else ""
-    printed = value_latex(result, wanted.unit)
+    printed = value_latex(result, unit)
+    spoken = f"{result} {_SPOKEN_UNIT[unit]}".strip()
+    other, factor = units.shown_as(wanted.unit, "SI")
+    if system == "dual" and other != unit:
+        also = units.printed(float(line.result) * factor, _RESULT_DIGITS)
+        printed += rf"\;\left({value_latex(also, other)}\right)"
+        spoken += f", that is {also} {_SPOKEN_UNIT[other]}"
     if not body.names and not any(isinstance(n, ast.BinOp) for n in ast.walk(body.expression)):
         symbolic = ""
     if re.sub(r"\\,|\s", "", symbolic) == re.sub(r"\s", "", wanted.latex):
         symbolic = ""
     if isinstance(body.expression, ast.Name):
         numeric = ""
-    said = {name: f"{text} {_SPOKEN_UNIT[SYMBOLS[name].unit]}".strip() for text, name in zip(texts, body.names)}
+    said = {name: f"{text} {_SPOKEN_UNIT[shown[name]]}".strip() for text, name in zip(texts, body.names)}
     parts = [f"{wanted.spoken}, {wanted.meaning},"]
     if symbolic:
         parts.append(f"equals {_say(body.expression, {name: SYMBOLS[name].spoken for name in body.names})};")
     if numeric:
         parts.append(f"{'with numbers,' if symbolic else 'equals'} {_say(body.expression, said)};")
-    parts.append(f"{'the result is' if symbolic or numeric else 'is'} {result} {_SPOKEN_UNIT[wanted.unit]}".strip() + ".")
+    parts.append(f"{'the result is' if symbolic or numeric else 'is'} {spoken}.")
     return Rendered(wanted.latex, symbolic, numeric, printed, " ".join(parts), texts, result)
 
 

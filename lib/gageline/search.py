@@ -10,7 +10,6 @@ from dataclasses import dataclass, field
 import numpy as np
 
 from . import families, study, units
-from .connections import details
 from .editions import Basis
 from .errors import GagelineError, InputError, nearest
 from .facts import bolts as facts
@@ -159,16 +158,13 @@ def _evaluate(connection, grids, size, changed):
 def _detailed(connection, joint, size):
     """Return (size,) whether every rule of spacing, edges and room for the wrench is met: the rules of ``details`` and ``refusals``."""
     d, given, ok = connection.size.d, connection.inputs, np.ones(size, dtype=bool)
-    pattern = joint.pattern
-    for i, a in enumerate(pattern):
-        for b in pattern[i + 1:]:
-            ok &= np.hypot(a.x - b.x, a.y - b.y) >= 8 / 3 * d - 1e-9
-    for ply in (joint.member, joint.plate):
-        for i, a in enumerate(ply.bolted):
-            for b in ply.bolted[i + 1:]:
-                ok &= _clear(a, b) >= d - 1e-9
+    pattern, plate = joint.pattern, joint.plate.bolted
+    for i, j in _neighbours(given):
+        ok &= np.hypot(pattern[i].x - pattern[j].x, pattern[i].y - pattern[j].y) >= 8 / 3 * d - 1e-9
+        for ply in (pattern, plate):
+            ok &= _clear(ply[i], ply[j]) >= d - 1e-9
     t = np.minimum(joint.member.t, joint.plate.t)
-    cap, times = (details.S_CAP_WEATHERING, 14) if given.bare_weathering else (details.S_CAP, 24)
+    cap, times = (joint.member.constants.spacing_weathering, 14) if given.bare_weathering else (joint.member.constants.spacing, 24)
     if given.rows > 1:
         gaps = [pattern[i + 1].x - pattern[i].x for i in range(given.rows - 1)]
         for gap in gaps:
@@ -185,7 +181,7 @@ def _detailed(connection, joint, size):
             ok &= side >= least[direction == "across"] - 1e-9
         nearest_end = _least(ends)
         farthest = nearest_end if ply.name == "plate" else _most([nearest_end, *(_least(column) for column in _sides(ply, free))])
-        ok &= farthest <= np.minimum(12 * ply.t, details.E_CAP) + 1e-9
+        ok &= farthest <= np.minimum(12 * ply.t, ply.constants.edge) + 1e-9
     # Holes must lie on the part, held sides included.
     for ply in (joint.member, joint.plate):
         for hole in ply.bolted:
@@ -199,6 +195,15 @@ def _detailed(connection, joint, size):
             for face in connection.element.faces:
                 ok &= np.abs(hole.y - face) >= room - 1e-9
     return ok & _fits_beside_flanges(connection, joint)
+
+
+def _neighbours(given):
+    """Return the pairs of holes that can be closest; holes are counted line by line."""
+    rows, lines = given.rows, given.lines
+    if given.stagger:
+        return list(itertools.combinations(range(rows * lines), 2))
+    along = [(line * rows + row, line * rows + row + 1) for line in range(lines) for row in range(rows - 1)]
+    return along + [(line * rows, (line + 1) * rows) for line in range(lines - 1)]
 
 
 def _sides(ply, free):

@@ -59,6 +59,28 @@ def over(connection, design, shape):
     return {id: np.broadcast_to(value, shape) for id, value in available_strengths(connection, design).items()}
 
 
+def ratios(connection, **lengths):
+    """Return D/C of a bolted connection over one or two of its lengths, from the checks' own limit states.
+
+    Parameters
+    ----------
+    connection : a bolted connection with lines and rows.
+    lengths : name -> (n,) values of one of ``search.LENGTHS``; with two names the grid of both. [in]
+
+    Returns
+    -------
+    ratio : (n,) or (n of the first, m of the second) D/C, infinite where no strength is left.
+    """
+    axes = [np.asarray(values, dtype=float) for values in lengths.values()]
+    grids = [grid.ravel() for grid in np.meshgrid(*axes, indexing="ij")]
+    changes = {name: (grid,) if name == "gage" else grid for name, grid in zip(lengths, grids)}
+    strengths = over(connection, connection.at(**changes), grids[0].shape)
+    weakest = np.minimum.reduce(list(strengths.values()))
+    with np.errstate(divide="ignore"):
+        found = np.where(weakest > 0, connection.demand.required_tension / np.maximum(weakest, 1e-300), np.inf)
+    return found.reshape([axis.size for axis in axes])
+
+
 def over_pitch(connection, pitches):
     """Return id -> (n,) available strength of a bolted design's rows at an array of pitches. [kip]
 

@@ -313,4 +313,31 @@ t_np   | t_{np}              | in  | thickness that needs no prying force
 Y_t    | Y_t                 |     | factor for the yield ratio of the flange
 Z_x    | Z_x                 | in³ | plastic section modulus about the strong axis
 Z_y    | Z_y                 | in³ | plastic section modulus about the weak axis
+A_SR   | A_{SR}              | in² | area that the stress range is figured on
+alpha_s | \alpha_s          |     | factor of the level of seismic force
+C_f    | C_f                 |     | constant of the fatigue category
+F_100  | F_{100}             | ksi | stress that the fatigue equation of welds' throats is written for
+F_1000 | F_{1000}            | ksi | stress that the fatigue equation is written for
+f_max  | f_{peak}            | ksi | largest stress at service load
+F_max  | F_{peak}            | ksi | limit of the largest stress at service load
+f_SR   | f_{SR}              | ksi | stress range
+F_SR   | F_{SR}              | ksi | allowable stress range
+F_TH   | F_{TH}              | ksi | threshold of the stress range
+i_L    | i_L                 |     | impact on the moving part of the live load
+n_SR   | n_{SR}              |     | cycles of the stress range in the design life
+P_cap  | P_{cap}             | kip | largest force that the system can deliver to the brace
+P_exp  | P_{exp}             | kip | strength expected of the brace
+P_L    | P_L                 | kip | live load as given
+P_Li   | P_{L,i}             | kip | live load with impact
+P_m    | P_m                 | kip | moving part of the live load
+P_max  | P_{max}             | kip | largest tension at service load
+P_n0   | P_{n,0}             | kip | nominal axial strength by the specified minimum tensile strength
+P_req  | P_{req}             | kip | required strength of the brace's connection
+P_SR   | P_{SR}              | kip | range of the force by live load at service level
+P_SRb  | P_{SR,b}            | kip | range of the force in the part considered
+R_FIL  | R_{FIL}             |     | reduction for the root of transverse fillets
+R_te   | R_{t,e}             |     | expected over specified minimum tensile strength
+R_y    | R_y                 |     | expected over specified minimum yield stress
+t_l    | t_l                 | in  | thickness of the plate loaded, fatigue
+t_ref  | t_{ref}             | in  | thickness that the fatigue equation is written for
 """)

@@ -6,6 +6,8 @@ Inside the package every number is a plain float in kip, inch and ksi; units are
 import functools
 import math
 import re
+from contextlib import contextmanager
+from contextvars import ContextVar
 from fractions import Fraction
 
 from .errors import InputError
@@ -31,6 +33,15 @@ degree = 0.017453292519943295 * radian = deg
 DISPLAY = {"in": "inch", "in²": "inch**2", "in³": "inch**3", "kip": "kip", "ksi": "ksi", "kip/in": "kip/inch", "rad": "radian",
            "kip·in": "kip*inch", "1/in": "1/inch", "": "dimensionless"}
 """Display unit as printed -> the registry's expression for it."""
+
+SYSTEMS = ("US", "SI", "dual")
+"""What a project may print in: inch and kip, SI, or inch and kip with results in SI in brackets."""
+
+_KN, _MM = 4.4482216152605, 25.4  # kN in a kip, mm in an inch, both exact
+_SI = {"in": ("mm", _MM), "in²": ("mm²", _MM**2), "in³": ("mm³", _MM**3), "kip": ("kN", _KN), "ksi": ("MPa", 1000 * _KN / _MM**2),
+       "kip/in": ("kN/mm", _KN / _MM), "kip·in": ("kN·m", _KN * _MM / 1000), "1/in": ("1/mm", 1 / _MM)}
+
+_LENGTHS = ContextVar("lengths", default="US")
 
 _KIND = {"in": "a length, for example 3/4 in or 19 mm", "kip": "a force, for example 31 kip or 140 kN",
          "ksi": "a stress, for example 50 ksi or 345 MPa", "in²": "an area, for example 3.75 in^2",
@@ -134,12 +145,98 @@ def read(text, unit, where="quantity"):
         raise InputError(f"{where} = {raw!r}: unit {rest!r} is not known; known are {known}") from None
 
 
+def shown_as(unit, system):
+    """Return (unit as printed, factor from a number in the display unit) of a system; dual prints as US does.
+
+    >>> shown_as("in", "SI"), shown_as("kip", "US"), shown_as("", "SI")
+    (('mm', 25.4), ('kip', 1.0), ('', 1.0))
+    """
+    return _SI.get(unit, (unit, 1.0)) if system == "SI" else (unit, 1.0)
+
+
+def amount(value, unit, system, rounded):
+    """Return a number with its unit as a system prints it; ``rounded`` is a function of the number that returns text.
+
+    >>> amount(187.13, "kip", "US", floor_figures), amount(187.13, "kip", "SI", floor_figures), amount(187.13, "kip", "dual", floor_figures)
+    ('187 kip', '832 kN', '187 kip (832 kN)')
+    """
+    printed_unit, factor = shown_as(unit, system)
+    text = f"{rounded(value * factor)} {printed_unit}".strip()
+    if system == "dual" and unit in _SI:
+        printed_unit, factor = _SI[unit]
+        text += f" ({rounded(value * factor)} {printed_unit})"
+    return text
+
+
+@contextmanager
+def lengths_in(system):
+    """Within it, ``fraction`` and ``feet`` write millimetres where the system is SI; it ends with the block that opens it."""
+    token = _LENGTHS.set(system)
+    try:
+        yield
+    finally:
+        _LENGTHS.reset(token)
+
+
+def drawn_in_si():
+    """Return whether lengths are being written in millimetres."""
+    return _LENGTHS.get() == "SI"
+
+
+def millimetres(value):
+    """Return inches as millimetres in print: one decimal at most, two figures below 1 mm.
+
+    >>> millimetres(3.0), millimetres(1 / 16), millimetres(1 / 32)
+    ('76.2', '1.6', '0.79')
+    """
+    size = abs(value) * _MM
+    text = f"{size:.2g}" if 0 < size < 0.95 else f"{size + 1e-9:.1f}".removesuffix(".0")
+    return ("−" if value < 0 and text != "0" else "") + text
+
+
+_ONE = r"(?:\d+-\d+/\d+|\d+/\d+|\d*[¼½¾⅛⅜⅝⅞]|\d+(?: \d{3})*(?:\.\d+)?)"
+_TOLD = re.compile(rf"(?<![\w.,/’'-])(?P<numbers>{_ONE}(?:(?: x | × | to | and | by |–){_ONE})*)"
+                   r"(?P<gap>[ -])(?P<unit>kip/in|kip·in|kip inches|kips?|ksi|in[²³]|inches|in\.(?= [a-z(])|in)(?![\w²³/·^])"
+                   r"(?! (?:the|line|lines|series|tension|shear|bearing|a row)\b)")  # "2 in line" is no length
+_TOLD_UNIT = {"kips": "kip", "inches": "in", "in.": "in", "kip inches": "kip·in"}
+
+
+def told(text, system):
+    """Return a sentence with its quantities in a system: SI instead of inch and kip, or with SI in brackets for dual.
+
+    >>> told("an edge of 1-1/2 in, 20.5 kip", "SI"), told("at 3 in", "dual"), told("at 3 in", "US")
+    ('an edge of 38.1 mm, 91.19 kN', 'at 3 in (76.2 mm)', 'at 3 in')
+    """
+    if system == "US":
+        return text
+
+    def one(match):
+        unit = _TOLD_UNIT.get(match["unit"], match["unit"])
+        si, factor = _SI[unit]
+
+        def number(found):
+            plain = found[0].replace(" ", "")
+            for sign, spelt in _VULGAR.items():
+                plain = plain.replace(sign, f"-{spelt}").lstrip("-")
+            value = _amount(plain, "number")[0]
+            return millimetres(value) if unit == "in" else printed(value * factor, max(4, len(plain.replace(".", "").lstrip("0"))))
+
+        said = f"{re.sub(_ONE, number, match['numbers'])}{match['gap']}{si}"
+        return said if system == "SI" else f"{match[0]} ({said.replace('-', ' ')})"
+
+    return _TOLD.sub(one, text)
+
+
 def fraction(value, denominator=16, unit=""):
     """Return inches as the trade writes them ("1½", "5/16", "10-3/16"), or as a decimal where no such fraction fits.
+
+    Within ``lengths_in("SI")`` it returns millimetres, and a unit " in" becomes " mm".
 
     >>> fraction(1.5), fraction(0.3125), fraction(0.3)
     ('1½', '5/16', '0.3')
     """
+    if _LENGTHS.get() == "SI":
+        return millimetres(value) + unit.replace("in", "mm")
     whole, part = divmod(abs(value) * denominator, denominator)
     if abs(part - round(part)) > 1e-6 * denominator:
         return ("−" if value < 0 else "") + f"{abs(value):.4g}" + unit
@@ -156,6 +253,8 @@ def feet(value):
     >>> feet(270.0), feet(126.5)
     ("22'-6\"", "10'-6½\"")
     """
+    if _LENGTHS.get() == "SI":
+        return f"{value * _MM:.0f} mm"
     whole, rest = divmod(value, 12.0)
     return f"{int(whole)}'-{fraction(rest)}\""
 

@@ -152,7 +152,7 @@ class TestKilled:
             ended += os.waitstatus_to_exitcode(os.waitpid(child, 0)[1]) == 0
             stood += settled(here, before)
             after(here, before)
-        assert 0 < stood and ended < 80
+        assert stood > 0 and ended < 80
         print(f"80 kills: {stood} issues stood, {ended} had ended before the signal")
 
     def test_killed_while_voiding(self, folder, tmp_path):
@@ -323,7 +323,8 @@ class TestTampering:
         path.write_bytes(good)
         assert self.faults(folder) == ""
 
-    @pytest.mark.parametrize(("old", "new"), [("preliminary", "for construction"), ("2026-12-01", "2026-11-01"), ('"A.B."', '"X.Y."'), ("0.5", "0.4")])
+    @pytest.mark.parametrize(("old", "new"), [("preliminary", "for construction"), ("2026-12-01", "2026-11-01"),
+                                              ('"A.B."', '"X.Y."'), ("0.5", "0.4")])
     def test_an_edited_record(self, folder, old, new):
         """It no longer gives its own hash."""
         path = folder / "H1-rev0.json"
@@ -392,7 +393,7 @@ class TestRevisions:
     def test_order(self):
         """Letters before numbers, AA after Z, 10 after 9, 1A between 1 and 2."""
         revs = ["A", "B", "Z", "AA", "0", "1", "1A", "2", "9", "10"]
-        assert sorted(reversed(revs), key=records.order) == revs
+        assert sorted(random.Random(1).sample(revs, len(revs)), key=records.order) == revs
 
     @pytest.mark.parametrize("rev", ["", "a", "01", "1a", "-1", "1/2", "../0", "0\n", "AAA", "١", "1.0"])
     def test_refused(self, rev):

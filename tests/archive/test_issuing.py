@@ -94,7 +94,8 @@ class TestSheets:
         run.setattr(issuing, "sheet_data", lambda node, **rest: seen.append(made := sheet_data(node, **rest)) or made)
         found = reading.read(story[0] / "H1.ipynb")
         older = records.read(story[1]).revisions("H1")[:1]
-        issuing._set(execute(found.book, story[0]), found, {"rev": "1", "status": "for approval", "text": "x", "date": "2026-12-05"}, older, "working")
+        issuing._set(execute(found.book, story[0]), found,
+                     {"rev": "1", "status": "for approval", "text": "x", "date": "2026-12-05"}, older, "working")
         run.undo()
         rows = [row for block in seen[0]["blocks"] if block["kind"] == "table" for row in block["rows"]]
         assert [row["changed"] for row in rows if row["cells"][:1] == [["P_L"]] and len(row["cells"]) == 4 and "live" in row["cells"][1][0]] == ["1"]
@@ -138,7 +139,8 @@ class TestSheets:
 
 
 class TestRefused:
-    @pytest.mark.parametrize(("change", "said"), [({"rev": "0"}, "never overwritten"), ({"rev": "A"}, "comes before"), ({"rev": "../2"}, "not allowed"),
+    @pytest.mark.parametrize(("change", "said"), [({"rev": "0"}, "never overwritten"), ({"rev": "A"}, "comes before"),
+                                                  ({"rev": "../2"}, "not allowed"),
                                                   ({"rev": "2", "status": "for construction"}, "approver has not signed; open item"),
                                                   ({"rev": "2", "date": "5.12.2026"}, "2026-12-01")])
     def test_one_sentence(self, story, in_process, change, said):
@@ -270,7 +272,8 @@ class TestCompare:
         edit(book, 'installation = "snug"  # dwg S-001, general notes', 'assumptions = ["Hanger is plumb."]')
         (project / "project.toml").write_text((project / "project.toml").read_text().replace("LRFD", "ASD"))
         said = "\n".join(changes.as_text(changes.compare(before, changes.state_of(book))))
-        for words in ("method: LRFD → ASD", "dwg S-201, hanger schedule → dwg S-202", "installation: snug → not given", "Hanger is plumb.: none → stated",
+        for words in ("method: LRFD → ASD", "dwg S-201, hanger schedule → dwg S-202", "installation: snug → not given",
+                      "Hanger is plumb.: none → stated",
                       "notebook: calc.curve() → (nothing)"):
             assert words in said, words
 

@@ -200,7 +200,8 @@ class TestStatuses:
         checked(book)
         assert statuses.refusals("for approval", reading.read(book)) == ["not every check is satisfied"]
 
-    @pytest.mark.parametrize(("status", "said"), [("superseded", "newer revision"), ("void", "gageline void"), ("for constrution", "for construction")])
+    @pytest.mark.parametrize(("status", "said"), [("superseded", "newer revision"), ("void", "gageline void"),
+                                                  ("for constrution", "for construction")])
     def test_words_that_cannot_be_issued(self, book, status, said):
         """Superseded and void come from later records only."""
         with pytest.raises(InputError, match=said):

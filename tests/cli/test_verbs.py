@@ -199,3 +199,32 @@ def test_demo_marks_compute():
     for path in sorted(DEMO.glob("*.ipynb")):
         run = gageline("quick", path)
         assert run.returncode == 0 and "N.G." not in run.stdout, (path.name, run.stdout, run.stderr)
+
+
+class TestStudies:
+    def test_search_prints_the_best_and_its_inputs_cell(self, project, tmp_path):
+        """Three rows of 7/8 in bolts at 3 in carry the hanger; the winner comes as an inputs cell, the plot as a file."""
+        run = gageline("search", project / "H1.ipynb", "--vary", "rows=2:5:1", "--vary", "plate_thickness=3/8 in,3/4 in", "--plot", tmp_path / "p.svg")
+
+        assert run.returncode == 0, run.stderr
+        assert "8 layouts evaluated" in run.stdout and "rows = 3  # chosen by the search" in run.stdout
+        assert (tmp_path / "p.svg").read_text().startswith("<?xml")
+
+    def test_search_refuses_a_bad_range(self, project):
+        """A range needs start, stop and step, and a known input."""
+        refused(gageline("search", project / "H1.ipynb", "--vary", "rows=2:5"), "start:stop:step")
+        refused(gageline("search", project / "H1.ipynb", "--vary", "rowz=2,3"), "rowz", "rows")
+
+    def test_margins_name_the_check_that_governs(self, project):
+        """The live load may grow to where the bolts fail."""
+        run = gageline("margins", project / "H1.ipynb")
+
+        assert run.returncode == 0 and "P_L" in run.stdout and "Bolts, shear" in run.stdout
+
+    def test_built_against_designed(self, project):
+        """A plate measured at 0.70 in. instead of 3/4 in. has 6.7 % less; a missing bolt is refused without a written basis."""
+        refused(gageline("built", project / "H1.ipynb", "--set", "missing_bolts=[2]"), "J1.7")
+        run = gageline("built", project / "H1.ipynb", "--set", "plate_thickness=0.70 in")
+
+        assert run.returncode == 0, run.stderr
+        assert "-6.7 %" in run.stdout and "As built: OK" in run.stdout

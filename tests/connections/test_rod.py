@@ -244,7 +244,7 @@ class TestWhole:
 
 class TestThreads:
     def test_rods_have_the_threads_of_bolts(self):
-        """Two transcriptions: threads of rods against those of bolts, 1/2 to 1-1/2 in."""
+        """Two tables set down apart: threads of rods against those of bolts, 1/2 to 1-1/2 in."""
         for name in bolts.bolt_sizes():
             if not name.startswith("M"):
                 assert rods.thread(name).tpi == bolts.bolt_size(name).tpi

@@ -111,7 +111,7 @@ class TestPublished:
         assert checks(splice(given, method="ASD"))["flange plate compression"].available / 2 == pytest.approx(157, rel=0.0035)
 
     def test_two_side_plates_in_millimetres(self):
-        """T10, university lecture notes to CSA S16-14: PL 25x300 with 3x2 bolts and two PL 14x220, 24 mm deducted for a hole; areas only."""
+        """A public worked example to CSA S16-14: PL 25x300 with 3x2 bolts and two PL 14x220, 24 mm deducted for a hole; areas only."""
         # 13/16 in hole of a 3/4 in bolt is 20.6 mm: 24 mm less 1/16 in is 22.4 mm, that of M20 (22 mm); so areas are compared with M20.
         made = splice(FLAT, member="PL 25 mm x 300 mm", web_plate_thickness="14 mm", web_plate_width="220 mm", web_rows=2,
                       web_gage="70 mm", bolt="M20",

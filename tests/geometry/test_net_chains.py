@@ -195,7 +195,7 @@ class TestPublished:
         ([(0, 60), (50, 110)], 174.5), ([(0, 60), (50, 110), (0, 205)], 157.1),
     ])
     def test_t01_millimetres(self, centres, width):
-        """Lecture notes to CSA S16-14, example T01: 210 wide, holes 24 mm, net widths."""
+        """A public worked example to CSA S16-14: 210 wide, holes 24 mm, net widths."""
         holes = punched(centres, 24.0, 24.0, 10.0)
 
         assert chain_through(holes, range(len(holes)), 0.0).net_area(2100.0) / 10.0 == pytest.approx(width, abs=0.0501)

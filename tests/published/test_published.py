@@ -2,8 +2,8 @@
 
 An example names its ``source``, the ``edition`` it follows and its ``evidence``: "found" (the page was read), "memory" (a published
 document recalled, its numbers recomputed) or "derived" (evaluated by hand from published constants: guards against change, no evidence).
-It has ``work``, plain steps that call the package's formulas, tables and geometry, or a whole ``connection`` of a ``family`` (bolted
-where none is named). Each of its ``results`` is an expression (``is``) or a ``check`` of the connection (or one ``step`` of it, by the
+It has ``work``, plain steps that call the package's formulas, tables and geometry, or a whole ``connection``; its ``family`` is that of
+its file where it names none. Each of its ``results`` is an expression (``is``) or a ``check`` of the connection (or one ``step`` of it, by the
 formula's name, or its ``demand``), with what the source prints: ``printed`` or ``nominal``, and ``lrfd`` and ``asd`` where it prints
 available strengths (by the ``state`` of check.FACTORS).
 
@@ -116,7 +116,11 @@ class Runner:
         return phi * value if method == "LRFD" else value / omega
 
 
-EXAMPLES = [example for path in sorted(Path(__file__).parent.glob("cases*.toml"))
+FAMILY_OF_FILE = {"cases": "bolted", "cases_hollow": "slotted", "cases_pins": "pinned"}
+"""File -> the family whose examples it holds where an example names none; other files bear the family's name."""
+
+EXAMPLES = [{"family": FAMILY_OF_FILE.get(path.stem, path.stem.removeprefix("cases_"))} | example
+            for path in sorted(Path(__file__).parent.glob("cases*.toml"))
             for example in tomllib.loads(path.read_text(encoding="utf-8"))["example"]]
 
 
@@ -146,7 +150,7 @@ def compared(case):
     # 1e-9: a value half way between two printed digits may lie a rounding error of binary on either side
     off = abs(found - float(printed)) / (allowed * (1 + 1e-9))
     evidence = row.get("evidence", runner.example["evidence"])
-    DEVIATIONS[name] = (evidence, runner.example["id"].split("-")[0].split(" ")[0], off, printed, found)
+    DEVIATIONS[name] = (evidence, runner.example["family"], off, printed, found)
     return found, printed, allowed, off
 
 
@@ -161,7 +165,10 @@ def summary():
     families = defaultdict(list)
     for name, (_, family, off, _, _) in published:
         families[family].append((off, name))
-    out += [f"  {family}: {len(found)} numbers, largest deviation {max(found)[0]:.2f} of its tolerance" for family, found in sorted(families.items())]
+    for family, found in sorted(families.items()):
+        cases = {id(row) for name, _, row, _ in CASES if name in {each for _, each in found}}
+        off, worst = max(found)
+        out.append(f"  {family}: {len(cases)} cases, {len(found)} numbers, largest deviation {off:.2f} of its tolerance ({worst})")
     if published:
         name, (_, _, off, printed, found) = max(published, key=lambda row: row[1][2])
         out.append(f"largest deviation: {off:.2f} of its tolerance, {name}: printed {printed}, found {found:.5g}")

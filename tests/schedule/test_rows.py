@@ -59,14 +59,14 @@ class TestCells:
     def value(self, name, text, unit=""):
         return rows._value(text, TEMPLATE.fields[name], unit)
 
-    @pytest.mark.parametrize("text, meant", [("3", "3 in"), ("2-1/2", "2-1/2 in"), ("2 1/2", "2 1/2 in"), ("1½", "1½ in"), (".75", ".75 in"), ("76 mm", "76 mm"),
-                                             ("1'-3\"", "1'-3\""), ("-1/4", "-1/4 in")])
+    @pytest.mark.parametrize("text, meant", [("3", "3 in"), ("2-1/2", "2-1/2 in"), ("2 1/2", "2 1/2 in"), ("1½", "1½ in"), (".75", ".75 in"),
+                                             ("76 mm", "76 mm"), ("1'-3\"", "1'-3\""), ("-1/4", "-1/4 in")])
     def test_head_unit_where_the_cell_has_none(self, text, meant):
         assert self.value("pitch", text, "in") == meant
 
     def test_lists_take_the_unit_one_by_one(self):
         assert self.value("gage", "3, 4 in, 75 mm", "in") == "3 in, 4 in, 75 mm"
-        assert self.value("holes", "0, 3; 3, 3", "in") == "0 in, 3 in;3 in, 3 in" or self.value("holes", "0, 3; 3, 3", "in") == "0 in, 3 in; 3 in, 3 in"
+        assert self.value("holes", "0, 3; 3, 3", "in") == "0 in, 3 in; 3 in, 3 in"
 
     def test_kinds(self):
         assert self.value("rows", "4") == 4 and self.value("rows", "4.0") == 4
@@ -129,8 +129,9 @@ class TestRules:
 
 
 WRONG = st.one_of(
-    st.sampled_from(["", "none", "0", "-3", "1e400", "nan", "inf", "3 kip", "31", "three", "=cmd|' /C calc'!A0", "@SUM(1)", "1/0", "3,4", "'", '"', "\\", "#", "½",
-                     "3 in in", "１２", "999999", "PL 1/2", "WT8x25", "2L4x4x3/8", "HSS4x4x1/4", "LSL along", "yes", "None", "True", "[]", "3;4", "٣", "-"]),
+    st.sampled_from(["", "none", "0", "-3", "1e400", "nan", "inf", "3 kip", "31", "three", "=cmd|' /C calc'!A0", "@SUM(1)", "1/0", "3,4", "'", '"',
+                     "\\", "#", "½", "3 in in", "１２", "999999", "PL 1/2", "WT8x25", "2L4x4x3/8", "HSS4x4x1/4", "LSL along", "yes", "None", "True",
+                     "[]", "3;4", "٣", "-"]),
     st.text(max_size=12))
 
 
@@ -170,7 +171,7 @@ def test_any_bytes_are_no_crash(tmp_path):
     import random
 
     dice = random.Random(5)
-    for i in range(200):
+    for _ in range(200):
         path = tmp_path / f"x.{dice.choice(['csv', 'xlsx'])}"
         path.write_bytes(bytes(dice.choice([dice.randrange(256), 44, 10, 34, 91, 93]) for _ in range(dice.randrange(200))))
         with contextlib.suppress(InputError):

@@ -6,8 +6,9 @@ import random
 from gageline.formula import FORMULAS
 from gageline.sheet import maths
 
-ODD = (r"12{,}345.6\,\text{kip}", r"x_{12}^{20}", r"\frac{12}{34}", r"10^{-12}", r"29\,000\,\text{ksi}", "1.2D+1.6L", "2.50", r"\sqrt{12.5}", r"\sqrt[3]{12}",
-       r"\text{M12 and 3.5}", "1,234", ".75", "90710001+12.5", "3.0+3.0", r"\left(12.5\,\text{in}\right)^{2}", r"\min\left(1.25,\,12\right)", "")
+ODD = (r"12{,}345.6\,\text{kip}", r"x_{12}^{20}", r"\frac{12}{34}", r"10^{-12}", r"29\,000\,\text{ksi}", "1.2D+1.6L", "2.50", r"\sqrt{12.5}",
+       r"\sqrt[3]{12}", r"\text{M12 and 3.5}", "1,234", ".75", "90710001+12.5", "3.0+3.0", r"\left(12.5\,\text{in}\right)^{2}",
+       r"\min\left(1.25,\,12\right)", "")
 
 
 def test_numbers_do_not_change_the_conversion():

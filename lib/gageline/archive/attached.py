@@ -1,6 +1,8 @@
 """The files inside a PDF, read without running anything of it."""
 
+import io
 import zipfile
+import zlib
 from pathlib import Path
 
 from .. import store
@@ -36,18 +38,17 @@ def read_bundle(path, pdf):
     try:
         with zipfile.ZipFile(path) as bundle:
             if sum(entry.file_size for entry in bundle.infolist()) > _LARGEST:
-                raise ReportError(f"{path} unpacks to more than {_LARGEST // 1_000_000} MB; it is no bundle of ours")
+                raise ValueError(f"it unpacks to more than {_LARGEST // 1_000_000} MB")
             return {entry.filename: bundle.read(entry) for entry in bundle.infolist()}
     except FileNotFoundError:
         raise ReportError(f"{pdf} carries no files and there is no bundle {path.name} beside it") from None
-    except (OSError, zipfile.BadZipFile) as error:
+    except (OSError, zipfile.BadZipFile, zlib.error, EOFError, NotImplementedError, RuntimeError, ValueError) as error:
+        # What zipfile raises on damaged data depends on where the damage is.
         raise ReportError(f"{path} cannot be read: {error}") from None
 
 
 def bundle(files):
     """Return the bytes of a bundle of name -> bytes; the same files give the same bytes."""
-    import io
-
     out = io.BytesIO()
     with zipfile.ZipFile(out, "w", zipfile.ZIP_DEFLATED) as made:
         for name in sorted(files):

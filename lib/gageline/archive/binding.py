@@ -76,7 +76,7 @@ def _joined(path, job, ledger, chosen):
 def _page_of(part, item):
     """Return the page index that a bookmark of a calculation leads to; named and explicit destinations both."""
     where = item.destination if item.destination is not None else item.action.D if item.action is not None else None
-    if where is not None and not hasattr(where, "__len__") or isinstance(where, str):
+    if (where is not None and not hasattr(where, "__len__")) or isinstance(where, str):
         where = None
     try:
         page = where[0]

@@ -100,8 +100,8 @@ def void(pdf, who, reason):
     GagelineError
         There is no record beside the PDF, or the revision is void already.
     """
-    from ..signoffs import checked_name, checked_text
     from ..sheet.build import check_printable
+    from ..signoffs import checked_name, checked_text
 
     who, reason = checked_name(who), checked_text(reason, "the reason")
     check_printable(who, [reason])

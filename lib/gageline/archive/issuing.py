@@ -7,7 +7,6 @@ from pathlib import Path
 
 from .. import running, store
 from ..errors import InputError, ReportError
-from ..sheet import blocks as sheet
 from ..sheet.blocks import SHEET_MIME
 from ..sheet.build import set_pdf, sheet_data
 from . import attached, changes, records, statuses
@@ -110,7 +109,8 @@ def _set(node, reading, said, older, profile):
         blocks = next(bundle["blocks"] for bundle in bundles if any(block["kind"] == "cover" for block in bundle["blocks"]))
         blocks[next(i for i, block in enumerate(blocks) if block["kind"] == "cover") + 1:0] = page
     extra = [{"name": name, "mime": "application/json", "text": store.canonical(data).decode(), "description": words} for name, data, words in (
-        ("register.json", {"rows": state.register}, "Assumptions and open items"), ("versions.json", state.versions, "Program and what it stands on"))]
+        ("register.json", {"rows": state.register}, "Assumptions and open items"),
+        ("versions.json", state.versions, "Program and what it stands on"))]
     data = sheet_data(node, attachments=extra)
     pdf = set_pdf(data, sheet_folder=own.parent if own.is_file() else None, profile=profile)
     return pdf, {entry["name"]: entry["text"].encode() for entry in data["attachments"]}, [key for _, key in lines]

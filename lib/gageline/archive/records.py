@@ -14,7 +14,8 @@ INTENT = ".issuing"
 _LATER = {"mark": str, "rev": str, "when": str, "who": str, "reason": str, "files": dict}
 _FIELDS = {"superseded": _LATER, "void": _LATER,
            "issue": {"mark": str, "rev": str, "issued": str, "sequence": int, "supersedes": list, "previous": str, "status": str, "date": str,
-                     "title": str, "revision_text": str, "signed": dict, "content": str, "notebook": str, "files": dict, "attachments": dict, "basis": dict, "inputs": dict, "results": dict, "versions": dict,
+                     "title": str, "revision_text": str, "signed": dict, "content": str, "notebook": str,
+                     "files": dict, "attachments": dict, "basis": dict, "inputs": dict, "results": dict, "versions": dict,
                      "register": list, "lines": list, "signoffs": list}}
 
 

@@ -46,4 +46,4 @@ def unformula(text):
     >>> unformula("=1+1"), unformula("H1"), unformula(" @x")
     ("'=1+1", 'H1', "' @x")
     """
-    return f"'{text}" if text.lstrip()[:1] in tuple("=+-@|%＝＋－＠") or text[:1] in "\t\r\n" and text else text
+    return f"'{text}" if text.lstrip()[:1] in tuple("=+-@|%＝＋－＠") or (text[:1] in "\t\r\n" and text) else text

@@ -68,7 +68,7 @@ def verify(path, *, run=False):
 
 def _against_record(path, found):
     try:
-        raw, record = records.read_record(path.with_suffix(".json"))
+        _, record = records.read_record(path.with_suffix(".json"))
     except ReportError as error:
         found.faults.append(f"unproved: {error}")
         return None

@@ -6,10 +6,11 @@ from typing import Literal
 
 from .. import check, loads
 from ..editions import Basis
-from ..errors import InputError
-from .fields import Force, Inputs, Number, Texts, note
+from ..errors import InputError, ScopeError
+from . import fatigue, impact, seismic
+from .fields import Force, Inputs, Length, Number, Texts, note
 
-_WHO, _LOADS, _SAID = "Identification", "Loads", "Assumptions"
+_WHO, _LOADS, _SAID, _FATIGUE, _SEISMIC = "Identification", "Loads", "Assumptions", "Fatigue", "Seismic brace"
 
 
 class CalcInputs(Inputs):
@@ -31,9 +32,23 @@ class CalcInputs(Inputs):
     rho: Number = note("redundancy factor", 1.0, group=_LOADS, ge=1, le=1.3)
     Omega_0: Number | None = note("overstrength factor, where the load with overstrength is required", None, group=_LOADS, ge=1, le=4)
     companion_L: Number = note("factor of L as a companion load (0.5 where ASCE 7 allows it)", 1.0, group=_LOADS)
+    impact: str = note("impact on the moving live load before combination: 20 %, 50 %, or 33 % legacy", "", group=_LOADS)
+    P_L_moving: Force | None = note("part of P_L that moves, where not all of it does", None, group=_LOADS, gt=0)
+    impact_basis: str = note("written basis of an impact that ASCE 7 4.6 does not name", "", group=_LOADS)
     tension: Force | None = note("required tension, instead of service loads", None, group=_LOADS, gt=0, le=50_000)
     compression: Force | None = note("required compression, with a given required tension", None, group=_LOADS, ge=0, le=50_000)
     demand_level: Literal["LRFD", "ASD"] | None = note("level of the given demand: LRFD or ASD", None, group=_LOADS)
+
+    fatigue_range: Force | None = note("range of the live load's axial force at service level, both senses together", None, group=_FATIGUE, gt=0, le=50_000)
+    fatigue_cycles: Number | None = note("cycles of that range in the design life; up to 20 000 need no check", None, group=_FATIGUE, ge=0, le=1e10)
+
+    seismic_system: Literal["SCBF", "OCBF"] | None = note("frame that the brace belongs to: SCBF (special) or OCBF (ordinary)", None, group=_SEISMIC)
+    system_cap: Force | None = note("largest force that the system can deliver to the brace", None, group=_SEISMIC, gt=0, le=50_000)
+    system_cap_basis: str = note("written basis of system_cap", "", group=_SEISMIC)
+    brace_compression: Force | None = note("expected strength of a special brace in compression (default: that in tension)", None, group=_SEISMIC, gt=0,
+                                           le=50_000)
+    clear_band: Length | None = note("clear band of the gusset between the brace's end and the line of restraint", None, group=_SEISMIC, gt=0, le=60)
+    seismic_basis: str = note("who confirmed the provisions of AISC 341, and how", "", group=_SEISMIC)
 
     assumptions: Texts = note("assumptions of the engineer, each a sentence", (), group=_SAID)
     open_items: Texts = note("what has to be confirmed, each a sentence", (), group=_SAID)
@@ -46,7 +61,7 @@ class CalcInputs(Inputs):
         InputError
             Both or neither are given, the level is missing, or it is not that of the method.
         """
-        service = {nature: getattr(self, name) for nature, name in SERVICE.items() if getattr(self, name) is not None}
+        service = self.service()
         given = [name for name in ("tension", "compression", "demand_level") if getattr(self, name) is not None]
         if service and given:
             raise InputError(f"{given[0]} is given together with service loads ({', '.join(SERVICE[n] for n in service)}); give one or the other")
@@ -70,8 +85,9 @@ class CalcInputs(Inputs):
         return {"companion_L": self.companion_L, "S_DS": self.S_DS, "rho": self.rho, "Omega_0": self.Omega_0}
 
     def service(self):
-        """Return the service loads given, by nature. [kip]"""
-        return {nature: getattr(self, name) for nature, name in SERVICE.items() if getattr(self, name) is not None}
+        """Return the service loads given, by nature, the live load with its impact. [kip]"""
+        given = {nature: getattr(self, name) for nature, name in SERVICE.items() if getattr(self, name) is not None}
+        return given | ({"L": impact.live_load(self)} if impact.fraction(self)[0] else {})
 
 
 SERVICE = {"D": "P_D", "L": "P_L", "Lr": "P_Lr", "S": "P_S", "R": "P_R", "W": "P_W", "W_opposite": "P_W_opposite", "E": "P_E"}
@@ -132,6 +148,9 @@ class Connection:
         self.inputs = inputs
         self.basis = basis or Basis()
         self.demand = inputs.required(self.basis)
+        for name, wanted, method in (("fatigue_range", fatigue.asked(inputs), "fatigue_details"), ("seismic_system", inputs.seismic_system, "brace")):
+            if wanted and not hasattr(self, method):
+                raise ScopeError(f"{name} is not for this calculation: {self.title.lower()} has no check for it; do that part by hand and remove the input")
 
     @classmethod
     def of(cls, *, edition="360-22", method="LRFD", loads="7-22", **inputs):
@@ -147,7 +166,15 @@ class Connection:
     @cached_property
     def checks(self):
         """Every limit state on the load path in order, those that do not apply with their reason."""
-        return tuple(self._checks())
+        made = seismic.adjusted(self, tuple(self._checks()))
+        return (*made, *fatigue.checks(self, made), *seismic.checks(self, made))
+
+    def service_tension(self):
+        """Return (tension at service load, in words where from). [kip]"""
+        if service := self.inputs.service():
+            found = loads.demands(service, "ASD", self.basis.loads, **self.inputs.load_options())
+            return found.required_tension, "the largest ASD combination"
+        return self.inputs.tension, f"the given demand, {self.inputs.demand_level}"
 
     @property
     def governing(self):
@@ -173,17 +200,24 @@ class Connection:
 
     def assumptions(self):
         """Return (text, basis) of what the calculation takes for granted, the engineer's own first."""
-        return [(text, "engineer") for text in self.inputs.assumptions]
+        i, basis = impact.fraction(self.inputs)
+        moving = [(f"The moving part of the live load is raised by {100 * i:.3g} % for impact.", basis)] if i else []
+        return [*((text, "engineer") for text in self.inputs.assumptions), *moving, *seismic.notes(self)]
 
     def open_items(self):
         """Return what has to be confirmed or decided before the calculation may be relied on."""
         failed = [f"{each.title}: D/C above 1.00." for each in self.checks if each.fails]
         advice = [f"{each.title}: recommendation not met." for each in self.checks if each.kind == "advice" and each.ok is False]
-        return [*self.inputs.open_items, *failed, *advice]
+        return [*self.inputs.open_items, *failed, *advice, *seismic.open_items(self)]
 
     def by_others(self):
         """Return what the scope leaves to others."""
         return ()
+
+    def left_to_others(self):
+        """Return what the scope leaves to others, without what the options of this calculation cover."""
+        covered = fatigue.asked(self.inputs)
+        return tuple(text.replace("fatigue, ", "").replace(", fatigue", "") if covered else text for text in self.by_others())
 
     def tables(self, part):
         """Return the family's own tables of a part of the load path."""

@@ -10,33 +10,27 @@ from ..geometry.pattern import first
 from ..provisions import bolts as rules
 from .outcome import worked
 
-LONG_JOINT = 38.0
-"""Fastener pattern length beyond which bolt shear is reduced. [in]  [AISC360] Table J3.2."""
-
-FILLER_FREE, FILLER_SLOPE = 0.25, 0.4
-"""Filler thickness without reduction [in] and reduction per inch beyond it.  [AISC360] J5.2(a)."""
-
 D_U = 1.13
 """Mean installed over specified minimum pretension.  [AISC360] J3.8 (2016), J3.9 (2022)."""
 
 
 def bolt_shear(joint, do):
     """Work out the nominal shear strength of one bolt, with long-joint and filler reductions."""
-    bolts = joint.bolts
+    bolts, fixed = joint.bolts, joint.member.constants
     A_b = do(rules.bolt_area, bolts.d)
-    long = joint.length > LONG_JOINT
+    long = joint.length > fixed.long_joint
     if isinstance(long, np.ndarray):
         F_nvr = np.where(long, rules.long_joint.bare(bolts.F_nv), bolts.F_nv)
     elif long:
-        do.say(f"The pattern is longer than {LONG_JOINT:g} in.")
+        do.say(f"The pattern is longer than {fixed.long_joint_text}.")
         F_nvr = do(rules.long_joint, bolts.F_nv)
     else:
         F_nvr = do(rules.short_joint, bolts.F_nv)
-    if joint.t_filler > FILLER_FREE:
-        k_f = do(rules.filler_factor, joint.t_filler, FILLER_FREE, FILLER_SLOPE)
+    if joint.t_filler > fixed.filler_free:
+        k_f = do(rules.filler_factor, joint.t_filler, fixed.filler_free, fixed.filler_slope)
         return do(rules.bolt_shear_through_fillers, F_nvr, A_b, bolts.n_s, k_f)
     if joint.t_filler:
-        do.say("Fillers of 1/4 in. or less need no reduction (J5.2).")
+        do.say(f"Fillers of {fixed.filler_text} or less need no reduction (J5.2).")
     return do(rules.bolt_shear, F_nvr, A_b, bolts.n_s)
 
 
@@ -82,17 +76,22 @@ def at_holes(joint, ply, reversed_load=False):
 
 def _classes(ply, reversed_load=False):
     """Group the bolts by what lies ahead of them: {(kind, clear distance): [clear distance, number]}, weakest first."""
-    holes, end = ply.bolted, ply.end
+    holes, end = ply.strip, ply.end
     if reversed_load:
         holes, end = mirrored(holes), (np.inf, 0.0)
     groups = defaultdict(int)
     values = {}
-    for clear in clear_distances(holes, end):
+    for clear in _at_bolts(holes, end):
         kind = str(np.ravel(clear.kind)[0]) if np.all(np.isfinite(clear.l_c)) else "none"
         key = (kind, round(float(first(clear.l_c)), 6))
         values[key] = clear.l_c
         groups[key] += 1
     return {key: (values[key], groups[key]) for key in sorted(groups, key=lambda key: key[1])}
+
+
+def _at_bolts(holes, end):
+    """Return the clear distances ahead of the bolts; an open hole may stand in the way of one but bears none."""
+    return [clear for hole, clear in zip(holes, clear_distances(holes, end)) if hole.bolted]
 
 
 def _bearing(joint, ply):
@@ -121,9 +120,9 @@ def bolt_table(joint):
     for ply in (joint.member, joint.plate):
         t = ply.n_plies * ply.t
         r_nb = _bearing(joint, ply).bare(joint.bolts.d, t, ply.F_u)
-        sides.append([(c.l_c, c.kind, r_nb, _tearout(joint, ply).bare(c.l_c, t, ply.F_u)) for c in clear_distances(ply.bolted, ply.end)])
+        sides.append([(c.l_c, c.kind, r_nb, _tearout(joint, ply).bare(c.l_c, t, ply.F_u)) for c in _at_bolts(ply.strip, ply.end)])
     rows = []
-    for i, (hole, at_member, at_plate) in enumerate(zip(joint.pattern, *sides), start=1):
+    for i, hole, at_member, at_plate in zip(joint.numbers, joint.pattern, *sides):
         rows.append({"bolt": i, "x": hole.x, "y": hole.y, "member": at_member, "plate": at_plate, "shear": r_nv,
                      "least": min(r_nv, *at_member[2:], *at_plate[2:])})
     sums = {side: sum(min(r_nv, *row[side][2:]) for row in rows) * joint.element.joints for side in ("member", "plate")}

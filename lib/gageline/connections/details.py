@@ -7,9 +7,6 @@ from ..facts import bolts as facts
 from ..geometry import closest_pair, edge_distances, lines_of
 from ..provisions import detailing, tension
 
-S_CAP, S_CAP_WEATHERING, E_CAP = 12.0, 7.0, 6.0
-"""Upper limits of spacing (painted; bare weathering steel) and of edge distance. [in]  [AISC360] J3.5 (2016), J3.6 (2022)."""
-
 SLENDER = 300.0
 """Advisory limit of slenderness in tension.  [AISC360] D1, User Note."""
 
@@ -40,9 +37,9 @@ def maximum_spacing(joint, edition, weathering):
     do = Working()
     t = min(joint.member.t, joint.plate.t)
     if weathering:
-        s_max = do(detailing.maximum_spacing_weathering, t, S_CAP_WEATHERING)
+        s_max = do(detailing.maximum_spacing_weathering, t, joint.member.constants.spacing_weathering)
     else:
-        s_max = do(detailing.maximum_spacing, t, S_CAP)
+        s_max = do(detailing.maximum_spacing, t, joint.member.constants.spacing)
     return _limit("spacing max", "Spacing along the member, maximum", "joint", clause, s_max, max(gaps), do.steps, at_most=True)
 
 
@@ -70,7 +67,7 @@ def edges(joint, ply, size, edition, free_sides):
         required = do(detailing.required_edge_distance, facts.minimum_edge(size), facts.edge_increment(size, kind, toward))
         checks.append(_limit(id, f"{title}, {name} distance, minimum", ply.name, clause, required, provided, do.steps))
     do = Working()
-    e_max = do(detailing.maximum_edge_distance, ply.t, E_CAP)
+    e_max = do(detailing.maximum_edge_distance, ply.t, ply.constants.edge)
     # Only the bolts next to an edge keep its plies together: of all bolts, the distance of the nearest one to each edge counts.
     nearest = [min(edge.end for edge in found)]
     nearest += [min(getattr(edge, side) for edge in found) for side, free in zip(("lower", "upper"), free_sides) if free]

@@ -115,6 +115,11 @@ def display(value, field):
     return str(value)
 
 
+def unit_of(inputs, name):
+    """Return the display unit of an input that is a quantity, None for others."""
+    return _unit(type(inputs).model_fields[name])
+
+
 def _unit(field):
     """Return the display unit of a quantity field, also where it may be None; None for other fields."""
     marks = [*field.metadata, *(mark for part in get_args(field.annotation) for mark in getattr(part, "__metadata__", ()))]

@@ -10,7 +10,6 @@ from ..check import governing
 from ..geometry import chain_through, critical_chains, lines_of
 from ..geometry.pattern import first
 from ..provisions import connecting, shear_lag, tension
-from .joint import DAMAGE
 from .outcome import Outcome, worked
 
 
@@ -23,10 +22,10 @@ def net_rupture(joint):
     """Return rupture on the member's most critical chain, with shear lag and the share of load left at the chain."""
     element = joint.element
     holes = joint.member.holes
-    found = chains(holes, element.A_g / element.pieces)
+    found = chains(holes, element.A_g / element.pieces, joint.member.constants.damage)
 
     def strength(chain, do):
-        A_n = net_area(do, chain, element.A_g, element.pieces, holes)
+        A_n = net_area(do, chain, element.A_g, element.pieces, holes, joint.member.constants.damage)
         U = shear_lag_factor(joint, do)
         A_e = do(tension.effective_net_area, A_n, U)
         if np.all(chain.n_ahead == 0):
@@ -36,27 +35,28 @@ def net_rupture(joint):
         return do(tension.net_rupture_behind_lead_row, joint.member.F_u, A_e, xi)
 
     nominal, chain, steps = governing(found, strength)
-    notes = () if chain is None else _chain_notes(found, chain, element, holes)
+    notes = () if chain is None or np.ndim(chain.net_area(0.0)) else _chain_notes(found, chain, element, holes)
     return Outcome(nominal, steps, chain, notes)
 
 
 def plate_rupture(ply):
     """Return rupture of the connection plates over their physical width; every element is connected, so U = 1.0."""
     A_g = ply.pieces * ply.width * ply.t
-    nominal, chain, steps = governing(chains(ply.holes, ply.width * ply.t), lambda chain, do: plate_chain(do, chain, A_g, ply, ply.holes))
+    nominal, chain, steps = governing(chains(ply.holes, ply.width * ply.t, ply.constants.damage),
+                                      lambda chain, do: plate_chain(do, chain, A_g, ply, ply.holes))
     return Outcome(nominal, steps, chain)
 
 
 def plate_chain(do, chain, A_g, ply, holes):
     """Work out the rupture strength of plates on one chain of holes out of a gross area."""
-    A_e = do(tension.effective_net_area, net_area(do, chain, A_g, ply.pieces, holes), do(shear_lag.shear_lag_case_1))
+    A_e = do(tension.effective_net_area, net_area(do, chain, A_g, ply.pieces, holes, ply.constants.damage), do(shear_lag.shear_lag_case_1))
     if np.all(chain.n_ahead == 0):
         return do(connecting.plate_rupture, ply.F_u, A_e)
     do.say(f"The chain lies behind {chain.n_ahead} of the {chain.n_total} bolts.")
     return do(connecting.plate_rupture_behind_lead_row, ply.F_u, A_e, do(tension.load_share, chain.n_total, chain.n_ahead))
 
 
-def chains(holes, A_g):
+def chains(holes, A_g, delta_h):
     """Return the chains to evaluate: the critical ones of a single layout, or of a sweep all that can become critical.
 
     In a sweep these are the critical ones of layouts sampled over it, and every chain through the two foremost holes of each
@@ -64,14 +64,30 @@ def chains(holes, A_g):
     """
     size = max(np.size(value) for hole in holes for value in (hole.x, hole.y, hole.t))
     if size == 1 and not any(isinstance(value, np.ndarray) for hole in holes for value in (hole.x, hole.y, hole.t)):
-        return critical_chains(holes, A_g, DAMAGE)
+        return critical_chains(holes, A_g, delta_h)
+    lead = _lead_row(holes)
+    if lead:
+        return [chain_through(holes, lead, delta_h)]
     picks = set()
     for sample in sorted({round(i * (size - 1) / 8) for i in range(9)}):
-        picks |= {chain.holes for chain in critical_chains([_at(hole, sample) for hole in holes], _entry(A_g, sample), DAMAGE, most=8)}
+        picks |= {chain.holes for chain in critical_chains([_at(hole, sample) for hole in holes], _entry(A_g, sample), delta_h, most=8)}
     lines = lines_of(holes)
     if len(lines) <= 4 and len({first(holes[line[0]].x) for line in lines}) > 1:
         picks |= {chain for choice in product(*((None, *line[:2]) for line in lines)) if (chain := tuple(i for i in choice if i is not None))}
-    return [chain_through(holes, pick, DAMAGE) for pick in sorted(picks)]
+    return [chain_through(holes, pick, delta_h) for pick in sorted(picks)]
+
+
+def _lead_row(holes):
+    """Return the lead row of a pattern without stagger, or None.
+
+    There every chain loses at least one hole for each line it crosses level, and one that dodges a hole on a diagonal, or lies behind
+    the lead row, gains area or sheds load by it: the straight chain through the lead row is the critical one at any spacing.
+    """
+    lines = lines_of(holes)
+    same = all(hole.bolted for hole in holes) and all(len(line) == len(lines[0]) for line in lines) and len({hole.across for hole in holes}) == 1
+    if not same or any(not np.array_equal(holes[i].x, holes[j].x) for line in lines[1:] for i, j in zip(lines[0], line)):
+        return None
+    return tuple(line[0] for line in lines)
 
 
 def _at(hole, sample):
@@ -83,11 +99,11 @@ def _entry(value, sample):
     return float(np.ravel(value)[min(sample, np.size(value) - 1)])
 
 
-def net_area(do, chain, A_g, pieces, holes):
+def net_area(do, chain, A_g, pieces, holes, delta_h):
     """Work out the net area on a chain, like holes and like diagonals together, over all like pieces."""
     A_h = None
     for across, t, number in _like_holes(holes[i] for i in chain.holes):
-        d_n = do(tension.hole_width, across, DAMAGE)
+        d_n = do(tension.hole_width, across, delta_h)
         if A_h is None:
             A_h = do(tension.first_hole_loss, pieces * number, d_n, t)
         else:

@@ -6,10 +6,8 @@ import numpy as np
 
 from ..check import Check, Working, not_applicable
 from ..provisions import connecting, pin_plates, pins, tension
+from .joint import INCH
 from .outcome import Outcome, worked
-
-B_0 = 0.63
-"""Constant of the effective width beside the hole. [in]  [AISC360] D5.1."""
 
 CLOSE, LOOSE = 1 / 32, 1 / 16
 """Clearances of a pin in its hole that the edition names. [in]  [AISC360] D5.1, D5.2, D6.2."""
@@ -34,6 +32,7 @@ class PinPlate:
     a : edge of the hole to the end, along the force; may be an array of shape (n,). [in]
     d_h : diameter of the hole. [in]
     cut : leg of its corners cut at 45 degrees, 0 for square corners. [in]
+    b_0 : constant of the effective width beside the hole, inch or metric. [in]  [AISC360] D5.1.
     """
 
     name: str
@@ -46,6 +45,7 @@ class PinPlate:
     a: object
     d_h: float
     cut: float = 0.0
+    b_0: float = INCH.beside_pin
 
 
 @dataclass(frozen=True)
@@ -76,12 +76,12 @@ def _shared(do, plate, P_n):
 def effective_edge(plate, do):
     """Work out the width beside the hole that counts. [in]"""
     b_p = do(pin_plates.edge_width, plate.w, plate.d_h)
-    return do(pin_plates.effective_edge_width, plate.t, B_0, b_p)
+    return do(pin_plates.effective_edge_width, plate.t, plate.b_0, b_p)
 
 
 def least_edge(plate):
     """Return the least distance from the hole to the end that D5.2 permits. [in]"""
-    b_e = min(2 * plate.t + B_0, (plate.w - plate.d_h) / 2)
+    b_e = min(2 * plate.t + plate.b_0, (plate.w - plate.d_h) / 2)
     return pin_plates.least_edge.bare(b_e)
 
 

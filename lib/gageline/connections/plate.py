@@ -80,7 +80,7 @@ def whitmore_rupture(joint):
 
 def width_rupture(ply, found):
     """Return rupture of plates within a Whitmore width, over every chain of the holes it takes in."""
-    inside = [hole for hole in ply.bolted if first(found.y_lo) - hole.across / 2 < first(hole.y) < first(found.y_hi) + hole.across / 2]
+    inside = [hole for hole in ply.strip if first(found.y_lo) - hole.across / 2 < first(hole.y) < first(found.y_hi) + hole.across / 2]
     if not inside:
         whole = worked(lambda do: do(connecting.plate_rupture, ply.F_u,
                                      do(tension.effective_net_area, whitmore_area(do, ply, found), do(shear_lag.shear_lag_case_1))))
@@ -89,7 +89,7 @@ def width_rupture(ply, found):
     def strength(chain, do):
         return net_section.plate_chain(do, chain, whitmore_area(do, ply, found), ply, inside)
 
-    nominal, _, steps = governing(net_section.chains(inside, first(found.L_w) * ply.t), strength)
+    nominal, _, steps = governing(net_section.chains(inside, first(found.L_w) * ply.t, ply.constants.damage), strength)
     return _with_path(Outcome(nominal, steps), found)
 
 

@@ -9,7 +9,6 @@ from ..check import governing, silent
 from ..geometry import Part, tear_out_blocks
 from ..provisions import block_shear as rules
 from ..provisions import tension
-from .joint import DAMAGE
 from .outcome import Outcome
 
 U_BS = 1.0
@@ -18,7 +17,7 @@ U_BS = 1.0
 
 def block_shear(ply, part):
     """Return the weakest tear-out block of a ply, counted over all its like pieces."""
-    blocks = tear_out_blocks(ply.bolted, part, DAMAGE)
+    blocks = tear_out_blocks(ply.strip, part, ply.constants.damage)
 
     def strength(block, do):
         scalar = not isinstance(block.A_gv, np.ndarray)
@@ -39,7 +38,7 @@ def block_shear(ply, part):
 def _written_out(do, block, ply):
     planes = Counter((round(plane.x1 - plane.x0, 9), plane.t, plane.n_holes) for plane in block.shear)
     A_gv = A_hv = None
-    d_along = do(tension.hole_width, ply.hole.along, DAMAGE)
+    d_along = do(tension.hole_width, ply.hole.along, ply.constants.damage)
     for (length, t, n_holes), number in sorted(planes.items()):
         n_v = ply.pieces * number
         A_gv = do(rules.first_shear_planes, n_v, length, t) if A_gv is None else do(rules.more_shear_planes, A_gv, n_v, length, t)
@@ -57,7 +56,7 @@ def _written_out(do, block, ply):
     else:
         A_gt = do(rules.gross_tension_area, ply.pieces, width, ply.t)
     if across:
-        d_across = do(tension.hole_width, ply.hole.across, DAMAGE) if ply.hole.across != ply.hole.along else d_along
+        d_across = do(tension.hole_width, ply.hole.across, ply.constants.damage) if ply.hole.across != ply.hole.along else d_along
         A_ht = do(rules.tension_plane_holes, ply.pieces * across, d_across, ply.t)
     else:
         A_ht = 0.0
@@ -69,7 +68,7 @@ def member_part(joint):
     """Return the member's connected element as the strip that tears; holes in an outstanding leg are taken off its area."""
     element, ply = joint.element, joint.member
     other = [hole for hole in ply.holes if not hole.bolted and hole.y < 0]
-    lost = max(((hole.across + DAMAGE) * hole.t for hole in other), default=0.0)
+    lost = max(((hole.across + ply.constants.damage) * hole.t for hole in other), default=0.0)
     hung = element.attachments
     if lost:
         hung = tuple(replace(a, area=max(a.area - lost, 0.0)) for a in hung)

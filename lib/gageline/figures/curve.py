@@ -22,7 +22,7 @@ LOOKS = (
 
 DROPPED = 0.5  # of the largest demand: combinations below it are counted, not drawn
 MOST_DEMANDS = 4
-SIZE, LEFT, RIGHT, BOTTOM, TOP = (6.6, 3.75), 0.56, 2.02, 0.5, 0.44  # [in]
+SIZE, LEFT, RIGHT, BOTTOM, TOP = (6.6, 3.45), 0.56, 2.02, 0.5, 0.44  # [in]
 
 
 def capacity_canvas(connection, curve):
@@ -221,7 +221,7 @@ def capacity_curve(connection, curve):
     at = curve.sweep.design
     here = "" if at is None else f" The design ({curve.sweep.describe(at)}) has {floor_figures(float(curve.envelope[at]))} kip."
     alt = (f"Diagram of {len(curve.strengths)} limit states over lengths of {fraction(float(curve.lengths[0]))} to "
-           f"{fraction(float(curve.lengths[-1]))} in; the largest demand is {ceil_figures(curve.demands[0][1])} kip.{here} {curve.sentence}")
+           f"{fraction(float(curve.lengths[-1]), unit=' in')}; the largest demand is {ceil_figures(curve.demands[0][1])} kip.{here} {curve.sentence}")
     return style.Figure(svg, caption, alt, width)
 
 
@@ -237,7 +237,7 @@ def permissible_canvas(connection, region):
     """Return the matplotlib Figure of the permissible D against L, with the design point."""
     service = connection.inputs.service()
     dead, live = service.get("D", 0.0), service.get("L", 0.0)
-    size, left, bottom, right, top = (4.4, 3.0), 0.56, 0.46, 0.2, 0.14
+    size, left, bottom, right, top = (4.4, 2.6), 0.56, 0.46, 0.2, 0.14
     figure = style.canvas(*size)
     wide, tall = size[0] - left - right, size[1] - bottom - top
     axes = figure.add_axes((left / size[0], bottom / size[1], wide / size[0], tall / size[1]))

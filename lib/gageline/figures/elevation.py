@@ -10,7 +10,7 @@ from . import style
 from .drafting import Drawing, broken, grouped
 from .scene import trace, view
 
-TALLEST = 3.7  # [in] of an elevation on paper: a figure, its caption and some text fit one sheet
+TALLEST = 3.1  # [in] of an elevation on paper: a figure, its caption and some text fit one sheet
 LARGEST = 0.38  # scale beyond which a small pattern looks coarse
 
 
@@ -94,7 +94,7 @@ def _holes(paper, seen, front, numbers):
         if i in numbered:
             off = 0.36 * min(hole.across, hole.along)
             paper.text(bolt.x + max(off, hole.along / 2 - 0.2 * hole.across) + paper.pt(1.6), bolt.y + max(off, hole.across / 2 - 0.2 * hole.along)
-                       + paper.pt(1.2), str(i + 1), style.TINY, z=8.5)
+                       + paper.pt(1.2), str(joint.numbers[i]), style.TINY, z=8.5)
     for hole in joint.member.holes:
         if not hole.bolted:
             paper.hole(hole.x, hole.y, hole.across, hole.along)
@@ -359,8 +359,8 @@ def elevation(connection, check=None):
     caption = f"Elevation on the {element.name}{seen_from}, to scale; dimensions in inches."
     given, n, lines = connection.inputs, len(joint.pattern), joint.n_lines
     alt = (f"Elevation of {element.member}, bolted by {n} bolt{'s' if n > 1 else ''} {bolt_size(connection)} in {lines} gage line"
-           f"{'s' if lines > 1 else ''}, length {fraction(joint.length)} in, to a plate {fraction(given.plate_thickness)} in thick and "
-           f"{fraction(given.plate_width)} in wide.")
+           f"{'s' if lines > 1 else ''}, length {fraction(joint.length, unit=' in')}, to a plate {fraction(given.plate_thickness, unit=' in')} thick and "
+           f"{fraction(given.plate_width, unit=' in')} wide.")
     if check is not None and check.path is not None:
         what, styles = described(check)
         verb = "Shaded" if isinstance(check.path, Block) else "Heavy line"

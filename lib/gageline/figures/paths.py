@@ -25,7 +25,7 @@ def paths_canvas(connection):
     views = [view(joint, path, supported=False) for path in traces]
     across = max(seen.wide[1] - seen.wide[0] for seen in views)
     tall = max(seen.top - seen.bottom for seen in views)
-    gap, words, tallest, edge = 0.14, 40, 2.0, 8
+    gap, words, tallest, edge = 0.14, 40, 1.75, 8
 
     def scale_for(columns):
         rows = math.ceil(len(checks) / columns)

@@ -91,9 +91,10 @@ class Worker:
 
 def _attached(book, name):
     """Return the JSON that an executed notebook attaches to its PDF under a name."""
-    from ..sheet.notebook import collect
+    from ..sheet.blocks import SHEET_MIME
 
-    meta = next(block for _, block in collect(book) if block["kind"] == "meta")
+    shown = (output.get("data", {}).get(SHEET_MIME) for cell in book["cells"] for output in cell.get("outputs", ()))
+    meta = next(block for bundle in shown if bundle for block in bundle["blocks"] if block["kind"] == "meta")
     return json.loads(next(entry["text"] for entry in meta["attachments"] if entry["name"] == name))
 
 

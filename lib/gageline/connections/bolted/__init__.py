@@ -12,11 +12,11 @@ from ...facts import bolts as facts
 from ...facts import grades
 from ...geometry import End, Hole, centred_edge, grid, mirrored
 from ...geometry.pattern import least, most
-from .. import bolt_group, details, net_section, plate, tear_out
+from .. import bolt_group, details, fatigue, net_section, plate, tear_out
 from ..base import Connection, Sweep, Table
 from ..element import element
 from ..fields import naming
-from ..joint import Bolts, Gusset, Joint, Ply
+from ..joint import Bolts, Gusset, Joint, Ply, constants
 from . import refusals
 from .inputs import BoltedInputs
 
@@ -94,7 +94,8 @@ class BoltedConnection(Connection):
         given, part = _Changed(self.inputs, changes), self.element
         centres = self.centres(given)
         member_hole, plate_hole = self._hole(given.member_holes), self._hole(given.plate_holes)
-        holes = [Hole(x, y, *member_hole, part.t) for x, y in centres]
+        missing = self._missing(centres)
+        holes = [Hole(x, y, *member_hole, part.t, i not in missing) for i, (x, y) in enumerate(centres, start=1)]
         if given.other_leg_holes:
             if part.name not in ("leg", "long leg", "short leg"):
                 raise InputError(f"other_leg_holes is for angles; {part.member} is none")
@@ -102,15 +103,16 @@ class BoltedConnection(Connection):
             holes += [Hole(x, -(y - part.t), *standard, part.t, bolted=False) for x, y in given.other_leg_holes]
         last = most([x for x, _ in centres])
         member = Ply("member", self.member_material.F_y, self.member_material.F_u, part.t, part.plies, part.pieces, tuple(holes),
-                     End(last + given.member_end), part.width, given.member_holes)
+                     End(last + given.member_end), part.width, given.member_holes, constants(self.basis))
         axis = (least([y for _, y in centres]) + most([y for _, y in centres])) / 2
         y_lo = axis - given.plate_width / 2 - given.plate_offset
-        shifted = [Hole(x, y - y_lo, *plate_hole, given.plate_thickness) for x, y in centres]
+        shifted = [Hole(x, y - y_lo, *plate_hole, given.plate_thickness, i not in missing) for i, (x, y) in enumerate(centres, start=1)]
         slope = 1 / math.tan(given.plate_edge_angle)
         slope = 0.0 if abs(slope) < 1e-9 else slope
         edge = End(given.plate_end - slope * (axis - y_lo), slope)
         plate = Ply("plate", self.plate_material.F_y, self.plate_material.F_u, given.plate_thickness, given.plates,
-                    given.plates * part.joints, tuple(mirrored(shifted)), edge, given.plate_width, given.plate_holes)
+                    given.plates * part.joints, tuple(mirrored(shifted)), edge, given.plate_width, given.plate_holes,
+                    constants(self.basis))
         n_s = part.plies + given.plates - 1
         group = self.bolt_group
         slip_critical = given.installation == "slip-critical"
@@ -120,6 +122,15 @@ class BoltedConnection(Connection):
         gap = (part.gap - self.inputs.plate_thickness) / 2 if part.plies == 2 else 0.0
         t_filler, n_fillers = given.filler_thickness + gap, given.fillers + (1 if gap > 1e-9 else 0)
         return Joint(part, member, plate, bolts, self._gusset(given.plate_width), t_filler, n_fillers, given.deformation_considered, given.U_by_hand, given.U_basis)
+
+    def _missing(self, centres):
+        """Return the numbers of missing bolts."""
+        missing = self.inputs.missing_bolts
+        if unknown := [number for number in missing if not 1 <= number <= len(centres)]:
+            raise InputError(f"missing_bolts: there is no bolt {unknown[0]}; the bolts of a group are numbered 1 to {len(centres)}")
+        if len(set(missing)) >= len(centres):
+            raise InputError("missing_bolts: no bolt is left")
+        return set(missing)
 
     def _hole(self, kind):
         """Return (across, along) of a hole as written in the inputs. [in]"""
@@ -219,6 +230,15 @@ class BoltedConnection(Connection):
             found = evaluate()
             yield strength_check(id, title, part, clause, state, method, found.nominal, C, found.steps, axial, tension=False)
 
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: member and plate at their bolts."""
+        given, joint = self.inputs, self.joint
+        fatigue.refuse_snug(given.installation)
+        note = "The stress range is axial; bending from the eccentricity of a lap is to be added by hand." if given.plates == 1 and joint.bolts.n_s == 1 else ""
+        yielding, rupture = ("plate yielding", "plate rupture") if len(joint.pattern) == 1 else ("Whitmore yielding", "Whitmore rupture")
+        return (fatigue.at_bolts("member", "Member", "member yielding", "member rupture", given.installation, joint.member.F_y, note=note),
+                fatigue.at_bolts("plate", "Plate", yielding, rupture, given.installation, joint.plate.F_y, note=note))
+
     # What the report says beside the checks
 
     def assumptions(self):
@@ -239,8 +259,13 @@ class BoltedConnection(Connection):
             notes.append((f"Eccentricity between the gage line and the centroid of the {self.element.member} is not regarded.", "J1.7"))
         if given.U_by_hand is not None:
             notes.append((f"U = {given.U_by_hand:g} set by the engineer: {given.U_basis}", "engineer"))
+        if given.missing_bolts:
+            numbers = ", ".join(str(number) for number in given.missing_bolts)
+            notes.append((f"As built: bolts missing at {numbers}; their holes are open and still weaken the parts.", "input"))
+        if given.eccentricity_basis:
+            notes.append((f"Eccentricity of the bolt group accepted by the engineer: {given.eccentricity_basis}", "engineer"))
         if joint.t_filler:
-            notes.append((f"Fillers of {units.fraction(joint.t_filler)} in at a shear plane, not developed outside the joint.", "input"))
+            notes.append((f"Fillers of {units.fraction(joint.t_filler, unit=' in')} at a shear plane, not developed outside the joint.", "input"))
         return [*super().assumptions(), *notes]
 
     def materials_text(self):
@@ -276,7 +301,7 @@ class BoltedConnection(Connection):
             least = grip + facts.bolt_length_addition(self.size) + facts.WASHER
         except LookupError:
             return f"grip {units.printed(grip)} in; length by the supplier"
-        return f"grip {units.printed(grip)} in; {units.fraction(math.ceil(least * 4 - 1e-9) / 4)} in with one washer (common practice)"
+        return f"grip {units.printed(grip)} in; {units.fraction(math.ceil(least * 4 - 1e-9) / 4, unit=' in')} with one washer (common practice)"
 
     @property
     def design(self):
@@ -315,6 +340,8 @@ class BoltedConnection(Connection):
     def sweep(self):
         """Return the sweep over rows of bolts at the chosen pitch, with the design's rows at other pitches beside it."""
         given = self.inputs
+        if given.missing_bolts:
+            return "Not drawn: bolts are missing, so this is one joint as built and no pattern to lengthen."
         if given.holes:
             return "Not drawn: the holes are given one by one, so there is no pitch at which rows could be added."
         pitch, stagger = given.pitch or 3.0, abs(given.stagger) * (given.lines > 1)
@@ -323,13 +350,13 @@ class BoltedConnection(Connection):
         stretched = None
         if given.rows > 1:
             thinner = min(self.joint.member.t, self.joint.plate.t)
-            pitches = np.linspace(8 / 3 * self.size.d, max(pitch, min(24 * thinner, details.S_CAP, 2 * pitch)), 200)
+            pitches = np.linspace(8 / 3 * self.size.d, max(pitch, min(24 * thinner, self.joint.member.constants.spacing, 2 * pitch)), 200)
             stretched = ((given.rows - 1) * pitches + stagger, self.at(pitch=pitches))
         lengths = np.array([(n - 1) * pitch + stagger for n in rows])
 
         def describe(i):
-            at = f" at {units.fraction(pitch)} in" if rows[i] > 1 else ""
-            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, l = {units.fraction(lengths[i])} in"
+            at = f" at {units.fraction(pitch, unit=' in')}" if rows[i] > 1 else ""
+            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, l = {units.fraction(lengths[i], unit=' in')}"
 
         return Sweep(lengths, [self.at(rows=n, pitch=pitch) for n in rows], rows.index(given.rows) if given.rows in rows else None, describe, stretched,
                      f"{given.rows} rows at other pitches", marks=tuple(f"{n} rows" for n in rows))

@@ -40,6 +40,8 @@ class BoltedInputs(CalcInputs):
     gage_from_back: Length | None = note("back of the leg, or outer face of the tee's flange, to the first line", None, group=_PATTERN, gt=0, le=60)
     stagger: Length = note("shift of every second line along the load", 0.0, group=_PATTERN, ge=-24, le=24)
     holes: Points = note("hole centres instead of lines and rows: x from the first row, y from the back or the lower edge", (), group=_PATTERN)
+    missing_bolts: tuple[Count, ...] = note("as built: numbers, as in the bolt table, of bolts that are missing; their holes stay open", (), group=_PATTERN)
+    eccentricity_basis: str = note("as built: written basis for accepting a bolt group up to 1/2 in off the member's centroid", "", group=_PATTERN)
     member_end: Length = note("last row to the end of the member", group=_PATTERN, gt=0, le=60)
     other_leg_holes: Points = note("open holes in the outstanding leg: x from the first row, y from the back", (), group=_PATTERN)
 

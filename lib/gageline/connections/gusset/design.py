@@ -15,7 +15,7 @@ from ...geometry import End, Hole, centred_edge, grid, mirrored, outside
 from ...geometry.whitmore import whitmore
 from ...provisions import gusset_plates
 from .. import plate
-from ..joint import Bolts, Gusset, Joint, Ply
+from ..joint import Bolts, Gusset, Joint, Ply, constants
 from . import brace_end, edges, layout
 
 BY_MEAN = {"compact corner": "", "noncompact corner": "mean", "extended corner": "", "single brace": "", "chevron": "",
@@ -76,11 +76,12 @@ def build(c):
         ply, l, reach = joint.plate, joint.length, (min(h.y for h in joint.plate.holes) - axis, max(h.y for h in joint.plate.holes) - axis)
     else:
         welds = _welds(given)
-        ply = Ply("plate", steel.F_y, steel.F_u, given.gusset_thickness, 1, 1, (), End(given.gusset_end), given.gusset_end_width, "STD")
+        ply = Ply("plate", steel.F_y, steel.F_u, given.gusset_thickness, 1, 1, (), End(given.gusset_end), given.gusset_end_width, "STD",
+                  constants(c.basis))
         l, reach = welds.l, (-welds.g / 2, welds.g / 2)
         if welds.g > given.gusset_end_width:
-            raise InputError(f"brace_weld_apart = {units.fraction(welds.g)} in is more than the gusset's free end of "
-                             f"{units.fraction(given.gusset_end_width)} in")
+            raise InputError(f"brace_weld_apart = {units.fraction(welds.g, unit=' in')} is more than the gusset's free end of "
+                             f"{units.fraction(given.gusset_end_width, unit=' in')}")
     supported = _edges(c)
     place = _layout(given, supported, l)
     for off in reach:
@@ -134,10 +135,11 @@ def _joint(c, axis):
     low = centred_edge(given.gusset_end_width, given.lines, gages)
     holes = [Hole(x, y, across, along, t) for x, y in grid(given.lines, given.rows, given.pitch or 0.0, gages, 0.0, low)]
     end = End(given.gusset_end)
-    ply = Ply("plate", steel.F_y, steel.F_u, t, 1, 1, tuple(mirrored(holes)), end, given.gusset_end_width, given.gusset_holes)
+    ply = Ply("plate", steel.F_y, steel.F_u, t, 1, 1, tuple(mirrored(holes)), end, given.gusset_end_width, given.gusset_holes,
+              constants(c.basis))
     if outside(list(ply.holes), ply.width, end):
-        raise InputError(f"a bolt hole is cut by an edge of the gusset's free end, {units.fraction(ply.width)} in wide; move it or widen the gusset")
-    member = Ply("brace", steel.F_y, steel.F_u, t, 1, 1, tuple(holes), End(1e3), ply.width, "STD")
+        raise InputError(f"a bolt hole is cut by an edge of the gusset's free end, {units.fraction(ply.width, unit=' in')} wide; move it or widen the gusset")
+    member = Ply("brace", steel.F_y, steel.F_u, t, 1, 1, tuple(holes), End(1e3), ply.width, "STD", constants(c.basis))
     slip = given.installation == "slip-critical"
     bolts = Bolts(c.size.name, group.name, c.size.d, group.F_nv_X if given.threads == "X" else group.F_nv_N, given.threads, given.shear_planes,
                   facts.pretension(c.size, group) if slip else 0.0, given.installation, {"A": 0.30, "B": 0.50}.get(given.slip_class, 0.0))
@@ -163,7 +165,7 @@ def _welds(given):
     if missing := [name for name in names if getattr(given, name) is None]:
         raise InputError(f"input {missing[0]} is missing: the brace is connected by welds")
     if given.brace_weld_length < 4 * given.brace_weld:
-        raise ScopeError(f"brace_weld_length = {units.fraction(given.brace_weld_length)} in is less than 4 times the leg of the weld (J2.2b)")
+        raise ScopeError(f"brace_weld_length = {units.fraction(given.brace_weld_length, unit=' in')} is less than 4 times the leg of the weld (J2.2b)")
     return brace_end.BraceWelds(given.brace_weld_lines, given.brace_weld_length, given.brace_weld_apart, given.brace_weld,
                                 weld_facts.electrode(given.electrode).F_EXX)
 
@@ -243,5 +245,5 @@ def _gusset(c, corner, lengths):
         needed = gusset_plates.compact_thickness.bare(c.gusset_material.F_y, max(corner, 0.0), E, max(lengths[0], 1e-6))
         if given.gusset_thickness < needed:
             raise ScopeError(f"gusset_support = 'compact corner': {units.printed(needed)} in of thickness are needed for that, the gusset has "
-                             f"{units.fraction(given.gusset_thickness)} in; use noncompact corner")
+                             f"{units.fraction(given.gusset_thickness, unit=' in')}; use noncompact corner")
     return Gusset(given.gusset_end_width, 0.0, given.gusset_end_width, K, None, basis)

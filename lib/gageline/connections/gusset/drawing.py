@@ -11,7 +11,7 @@ from ...figures.elevation import described, ratio
 from ...geometry import Block
 from ...units import ceil_figures, fraction
 
-TALLEST, LARGEST = 4.9, 0.3  # [in] of the elevation on paper; scale beyond which a small gusset looks coarse
+TALLEST, LARGEST = 4.3, 0.3  # [in] of the elevation on paper; scale beyond which a small gusset looks coarse
 SECTION_SCALE, FLANGE_SHOWN = 0.62, 3.4  # scale of the sections; [in] of the support shown beside the gusset
 
 
@@ -247,7 +247,7 @@ def elevation(connection):
     else:
         caption += f"welds {fraction(design.welds.g)} apart, their end {fraction(given.work_point_distance)} from the work point."
     caption += f" Thin: Whitmore width of {design.found.L_w:.4g} in." if check is not None and isinstance(check.path, Block) else ""
-    alt = (f"Elevation of a gusset {fraction(given.gusset_thickness)} in thick between brace {given.brace} and {held}; the brace at "
+    alt = (f"Elevation of a gusset {fraction(given.gusset_thickness, unit=' in')} thick between brace {given.brace} and {held}; the brace at "
            f"{math.degrees(given.brace_angle):.4g} degrees.")
     if check is not None:
         what, styles = described(check)
@@ -290,6 +290,6 @@ def edge_section(connection):
         drawn = section_canvas(connection)
         svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
     held = [edge for edge in (design.edges.beam, design.edges.column) if edge is not None]
-    said = "; ".join(f"fillets of {fraction(edge.w_f)} in on both sides to the {edge.support.part} of {edge.support.name}" for edge in held)
+    said = "; ".join(f"fillets of {fraction(edge.w_f, unit=' in')} on both sides to the {edge.support.part} of {edge.support.name}" for edge in held)
     return style.Figure(svg, "Sections through the welded edges, to scale; dimensions in inches.",
                         f"Sections through the edges of the gusset: {said}.", width)

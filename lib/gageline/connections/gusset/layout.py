@@ -116,5 +116,5 @@ def _simple(layout):
                 raise InputError("the edges of the gusset cross each other: check edge lengths, brace_angle, work_point_distance, "
                                  "gusset_end_width")
     if min(layout.side(layout.last, 1), layout.side(layout.last, -1)) <= 0:
-        raise InputError(f"the brace's axis leaves the gusset {fraction(layout.last)} in from the work point; check the lengths of the "
+        raise InputError(f"the brace's axis leaves the gusset {fraction(layout.last, unit=' in')} from the work point; check the lengths of the "
                          "supported edges")

@@ -7,9 +7,11 @@ import numpy as np
 from ... import units
 from ...check import FACTORS, not_applicable, strength_check
 from ...editions import CLAUSES
+from ...errors import ScopeError
 from ...facts import bolts as facts
 from ...provisions import prying
-from .. import bolt_group
+from ...provisions.fatigue import share_of_pretensioned_bolts
+from .. import bolt_group, fatigue
 from ..base import Connection, Sweep, Table
 from . import building, flanges, limits, refusals, stem, support
 from .inputs import HangerInputs
@@ -172,6 +174,27 @@ class HangerConnection(Connection):
             out.append(phi * nominal if self.basis.method == "LRFD" else nominal / omega)
         return min(out)
 
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: bolts in tension with prying, hung member and stem at the ends of the welds."""
+        h, given, size = self.hanger, self.inputs, self.sizes[0]
+        fatigue.refuse_snug(given.installation)
+        if h.psi or h.lower:
+            why = "inclination other than 0" if h.psi else "joined = 'bolted', in bearing with snug-tight bolts"
+            raise ScopeError(f"fatigue with {why} is not covered: Appendix 3 wants pretensioned joints, and bolts in tension alone; use vertical pull "
+                             "and welds to the stem")
+        prying = [by_id[f"{side} prying"] for side in ("fitting", "beam")]
+        forces = [(fatigue.value_in(each, "T_q"), fatigue.value_in(each, "T_qt")) for each in prying if fatigue.holds(each, "T_qt")]
+        if len(forces) < 2:
+            raise ScopeError("fatigue: the bolts do not carry the required pull with its prying, so the range of their force is unknown; strengthen them")
+        T_q, T_qt = max(forces, key=lambda pair: pair[1])
+        return (fatigue.Detail("bolts", "bolts to the beam in tension", "bolts", "G", "Table A-3.1, 8.5",
+                               lambda do: fatigue.thread(do, size.d, size.tpi, size.metric, h.n),
+                               lambda do, P: do(share_of_pretensioned_bolts, P, T_q, T_qt),
+                               note="One fifth of the range, with the prying of the required load, for pretensioned bolts in a grip of steel only."),
+                fatigue.weld_ends("member", "Hung member", self.hung.element.t, ("member rupture", "A_e"), h.hung.F_y),
+                fatigue.weld_ends("stem", "Stem", h.fitting.t_s, ("Whitmore yielding", "A_g"), h.fitting.F_y),
+                fatigue.throats("stem", "Welds at the stem", "welds"))
+
     # What the report says beside the checks
 
     def assumptions(self):
@@ -234,17 +257,17 @@ class HangerConnection(Connection):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, h, fit = self.inputs, self.hanger, self.fitting
         n, size = h.n, self.sizes[0]
-        spacing = f"{given.rows} rows at {units.fraction(given.pitch)} in" if given.rows > 1 else "1 row"
+        spacing = f"{given.rows} rows at {units.fraction(given.pitch, unit=' in')}" if given.rows > 1 else "1 row"
         if h.welds:
-            joint = f"{2 * h.welds.pieces} fillets {units.fraction(given.weld)} in, {units.fraction(given.weld_length)} in long, {given.electrode}"
+            joint = f"{2 * h.welds.pieces} fillets {units.fraction(given.weld, unit=' in')}, {units.fraction(given.weld_length, unit=' in')} long, {given.electrode}"
         else:
             joint = (f"{h.lower.n_bolts} bolts {self.sizes[1].name} in, {self.bolt_group.product or self.bolt_group.name}-{given.lower_threads}, "
                      f"holes {given.lower_holes}")
-        return [("Fitting", f"{fit.name} x {units.fraction(h.length)} in long, {given.fitting_grade}"),
+        return [("Fitting", f"{fit.name} x {units.fraction(h.length, unit=' in')} long, {given.fitting_grade}"),
                 ("Beam", f"{self.beam.section.name}, {given.beam_grade}"),
                 ("Bolts to the beam", f"{n} bolts {size.name}{'' if size.metric else ' in'}, "
                                       f"{self.bolt_group.product or self.bolt_group.name}-{given.threads}, {given.installation}, {spacing}, "
-                                      f"gage {units.fraction(given.gage)} in"),
+                                      f"gage {units.fraction(given.gage, unit=' in')}"),
                 ("Holes", f"fitting {given.fitting_holes}, beam {given.beam_holes}"),
                 ("Hung member", f"{self.hung.element.member}, {self.member_material.name}"), ("Joint at the stem", joint)]
 
@@ -304,14 +327,14 @@ class HangerConnection(Connection):
         stretched = None
         if given.rows > 1:
             t = min(self.fitting.t_f, self.beam.section.t_f)
-            pitches = np.linspace(8 / 3 * self.sizes[0].d, max(pitch, min(24 * t, 12.0, 2 * pitch)), 200)
+            pitches = np.linspace(8 / 3 * self.sizes[0].d, max(pitch, min(24 * t, self.hanger.upper.member.constants.spacing, 2 * pitch)), 200)
             pitches = pitches[[self._fits((given.rows - 1) * s + 2 * given.fitting_end) for s in pitches]]
             stretched = ((given.rows - 1) * pitches + 2 * given.fitting_end, self.at(s=pitches))
         lengths = np.array([(n - 1) * pitch + 2 * given.fitting_end for n in rows])
 
         def describe(i):
-            at = f" at {units.fraction(pitch)} in" if rows[i] > 1 else ""
-            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, fitting {units.fraction(lengths[i])} in long"
+            at = f" at {units.fraction(pitch, unit=' in')}" if rows[i] > 1 else ""
+            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, fitting {units.fraction(lengths[i], unit=' in')} long"
 
         return Sweep(lengths, [self.at(rows=n, s=pitch) for n in rows], rows.index(given.rows), describe, stretched,
                      f"{given.rows} rows at other pitches", "length of the fitting along the beam, in", tuple(f"{n} rows" for n in rows))

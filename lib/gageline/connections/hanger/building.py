@@ -7,7 +7,7 @@ from ...facts import bolts as facts
 from ...facts import grades, shapes, welds
 from ...geometry import End, Hole, centred_edge, grid, mirrored
 from ..element import element
-from ..joint import Bolts, Joint, Ply
+from ..joint import Bolts, Joint, Ply, constants
 from .design import Beam, Fitting, Hanger, Hung, Welds
 
 FAR = 1e3
@@ -69,7 +69,7 @@ class _One:
     joints = 1
 
 
-def upper(given, fit, support, size, group, rows, s):
+def upper(given, basis, fit, support, size, group, rows, s):
     """Return the bolts to the beam as a joint in shear along the beam."""
     centres = grid(2, rows, s if rows > 1 else 0.0, (given.gage,), 0.0, 0.0)
     last = (rows - 1) * s
@@ -79,14 +79,15 @@ def upper(given, fit, support, size, group, rows, s):
         edge = centred_edge(width, 2, [given.gage])
         holes = [Hole(x, y + edge, *hole(size, kind), t) for x, y in centres]
         end = End(last + given.fitting_end) if name == "member" else End(given.beam_end - last / 2)
-        plies.append(Ply(name, part.F_y, part.F_u, t, 1, 1, tuple(holes if name == "member" else mirrored(holes)), end, width, kind))
+        plies.append(Ply(name, part.F_y, part.F_u, t, 1, 1, tuple(holes if name == "member" else mirrored(holes)), end, width, kind,
+                         constants(basis)))
     slip_critical = given.installation == "slip-critical"
     bolts = Bolts(size.name, group.name, size.d, group.F_nv_X if given.threads == "X" else group.F_nv_N, given.threads, 1,
                   facts.pretension(size, group) if slip_critical else 0.0, given.installation, {"A": 0.30, "B": 0.50}.get(given.slip_class, 0.0))
     return Joint(_One, plies[0], plies[1], bolts, None, 0.0, 0, given.deformation_considered)
 
 
-def lower(given, fit, member, size, group, edges):
+def lower(given, basis, fit, member, size, group, edges):
     """Return the bolts between the hung member and the stem as a joint; the stem is its plate, cut off at ``edges`` beside the pull. [in]"""
     part = member.element
     gages = (given.lower_gage,) * (given.lower_lines - 1)
@@ -97,11 +98,11 @@ def lower(given, fit, member, size, group, edges):
     sizes = hole(size, given.lower_holes)
     last = max(x for x, _ in centres)
     ply = Ply("member", member.F_y, member.F_u, part.t, part.plies, part.pieces, tuple(Hole(x, y, *sizes, part.t) for x, y in centres),
-              End(last + given.member_end), part.width, given.lower_holes)
+              End(last + given.member_end), part.width, given.lower_holes, constants(basis))
     shifted = [Hole(x, y - axis + low, *sizes, fit.t_s) for x, y in centres]
     slope = tan(given.inclination)
     stem = Ply("plate", fit.F_y, fit.F_u, fit.t_s, fit.plies, fit.plies, tuple(mirrored(shifted)),
-               End(given.stem_end - slope * low, slope), low + high, given.lower_holes)
+               End(given.stem_end - slope * low, slope), low + high, given.lower_holes, constants(basis))
     bolts = Bolts(size.name, group.name, size.d, group.F_nv_X if given.lower_threads == "X" else group.F_nv_N, given.lower_threads,
                   part.plies + fit.plies - 1, 0.0, "pretensioned" if given.installation != "snug" else "snug", 0.0)
     return Joint(part, ply, stem, bolts, None, 0.0, 0, given.deformation_considered, given.U_by_hand, given.U_basis)
@@ -117,10 +118,10 @@ def made(given, basis, fit, support, member, sizes, group, P, rows=None, s=None)
     if given.joined == "welded":
         part = member.element
         seams = Welds(given.weld, given.weld_length, welds.electrode(given.electrode).F_EXX, part.width, part.pieces)
-    above = upper(given, fit, support, sizes[0], group, rows, s)
+    above = upper(given, basis, fit, support, sizes[0], group, rows, s)
     common = (fit, support, member, above, group.F_nt, rows, s, given.fitting_end, given.gage, given.inclination, P, basis.method, basis.edition)
     if seams:
         return Hanger(*common, seams, None, given.stem_end, by_hand)
     # A first joint with edges that do not matter yet gives the spread of the bolts, from which the stem's edges follow.
-    first = Hanger(*common, None, lower(given, fit, member, sizes[1], group, (FAR, FAR)), given.stem_end, by_hand)
-    return Hanger(*common, None, lower(given, fit, member, sizes[1], group, first.edges), given.stem_end, by_hand)
+    first = Hanger(*common, None, lower(given, basis, fit, member, sizes[1], group, (FAR, FAR)), given.stem_end, by_hand)
+    return Hanger(*common, None, lower(given, basis, fit, member, sizes[1], group, first.edges), given.stem_end, by_hand)

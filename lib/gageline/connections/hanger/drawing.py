@@ -7,7 +7,7 @@ from ...figures.drafting import Drawing, broken, grouped
 from ...figures.section import HEAD
 from ...units import ceil_figures, fraction, ratio_text
 
-TALLEST, WIDEST, LARGEST = 4.3, 4.4, 0.42
+TALLEST, WIDEST, LARGEST = 3.5, 4.4, 0.42
 """Height and width of the drawn part on paper [in], and the scale beyond which a small hanger looks coarse."""
 
 _BELOW, _ABOVE = 3.2, 1.1
@@ -79,7 +79,7 @@ def elevation(c):
         svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
     h, governs = c.hanger, c.governing
     caption = f"Elevation along the beam, to scale; dimensions in inches. Marked: {governs.title}, governs, D/C = {ratio_text(governs.ratio)}."
-    alt = (f"{c.subject}: fitting {fraction(h.length)} in long with {h.rows} rows of two bolts; the hung member is {c.inputs.joined} to the stem; "
+    alt = (f"{c.subject}: fitting {fraction(h.length, unit=' in')} long with {h.rows} rows of two bolts; the hung member is {c.inputs.joined} to the stem; "
            f"pull {ceil_figures(h.P)} kip. Marked: {governs.title}.")
     return style.Figure(svg, caption, alt, width)
 
@@ -226,8 +226,8 @@ def section(c):
     h = c.hanger
     caption = (f"Section across the beam at a row of bolts, to scale; dimensions in inches. {c.fitting.name} below {c.beam.section.name}; "
                "bolts drawn simplified.")
-    alt = (f"Section: the bottom flange of {c.beam.section.name}, {fraction(c.beam.section.b_f)} in wide, above {c.fitting.name}, "
-           f"{fraction(c.fitting.width)} in wide; gage {fraction(h.g)} in; {c.hung.element.member} at the stem.")
+    alt = (f"Section: the bottom flange of {c.beam.section.name}, {fraction(c.beam.section.b_f, unit=' in')} wide, above {c.fitting.name}, "
+           f"{fraction(c.fitting.width, unit=' in')} wide; gage {fraction(h.g, unit=' in')}; {c.hung.element.member} at the stem.")
     return style.Figure(svg, caption, alt, width)
 
 

@@ -9,7 +9,6 @@ from ...check import FACTORS, Working, silent
 from ...provisions import block_shear, bolt_tension, prying, prying_strength, tension, welds
 from ...provisions import bolts as bolt_rules
 from .. import bolt_group
-from ..joint import DAMAGE
 from ..outcome import Outcome, worked
 
 NAMES = {"fitting": "the fitting's flange", "beam": "the beam's flange"}
@@ -180,7 +179,7 @@ def flange_shear(h, side, rupture):
         A_gv = do(block_shear.first_shear_planes, 2, h.length, t)
         if not rupture:
             return do(welds.shear_yielding, part.F_y, A_gv)
-        d_n = do(tension.hole_width, ply.hole.along, DAMAGE)
+        d_n = do(tension.hole_width, ply.hole.along, ply.constants.damage)
         A_hv = do(block_shear.first_shear_plane_holes, h.n, d_n, t)
         return do(welds.shear_rupture, part.F_u, do(block_shear.net_shear_area, A_gv, A_hv))
 

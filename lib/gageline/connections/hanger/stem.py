@@ -4,7 +4,6 @@ from ...check import governing
 from ...geometry import Part
 from ...provisions import block_shear, connecting, hanger, shear_lag, tension, welded_ends, welds
 from .. import net_section, tear_out
-from ..joint import DAMAGE
 from ..outcome import Outcome, worked
 from ..plate import SPREAD
 
@@ -110,7 +109,7 @@ def stem_rupture(h):
 
 
 def _holes(do, h, A_g):
-    d_n = do(tension.hole_width, h.lower.plate.hole.across, DAMAGE)
+    d_n = do(tension.hole_width, h.lower.plate.hole.across, h.lower.plate.constants.damage)
     A_h = do(tension.first_hole_loss, h.fitting.plies * h.lower.n_lines, d_n, h.fitting.t_s)
     return do(tension.net_area_straight, A_g, A_h)
 

@@ -6,7 +6,6 @@
 from ...check import Check, Working
 from ...provisions import beam as rules
 from ...provisions import tension
-from ..joint import DAMAGE
 from ..outcome import worked
 
 
@@ -37,7 +36,7 @@ def flange_holes(h):
     """Return the advice on the holes in the beam's tension flange, and its numbers: areas, forces, moment, and Eq. J10-1 beside it."""
     beam, shape, do = h.beam, h.beam.section, Working()
     A_fg = do(rules.gross_flange_area, shape.b_f, shape.t_f)
-    d_n = do(tension.hole_width, h.upper.plate.hole.across, DAMAGE)
+    d_n = do(tension.hole_width, h.upper.plate.hole.across, h.upper.plate.constants.damage)
     A_fn = do(rules.net_flange_area, A_fg, 2, d_n, shape.t_f)
     Y_t = 1.0 if beam.F_y / beam.F_u <= 0.8 else 1.1
     P_fu = do(rules.flange_rupture_force, beam.F_u, A_fn)

@@ -8,8 +8,9 @@ from ... import units
 from ...check import not_applicable, strength_check
 from ...errors import InputError, ScopeError
 from ...facts import grades
-from .. import pin, pin_plate
+from .. import fatigue, pin, pin_plate
 from ..base import Connection, Sweep
+from ..joint import constants
 from .inputs import PinnedInputs
 
 
@@ -74,18 +75,18 @@ class PinnedConnection(Connection):
         if not self.eyebar and given.member_edge is None:
             raise InputError("input member_edge is missing: edge of the hole to the end of the pin plate, along the force")
         if self.eyebar and given.head_diameter <= given.member_width:
-            raise InputError(f"head_diameter = {units.fraction(given.head_diameter)} in is not more than the width of the body, "
-                             f"{units.fraction(given.member_width)} in")
+            raise InputError(f"head_diameter = {units.fraction(given.head_diameter, unit=' in')} is not more than the width of the body, "
+                             f"{units.fraction(given.member_width, unit=' in')}")
         parts = [("support", given.support_width, given.support_corner_cut, given.support_edge)]
         parts.append(("head", given.head_diameter, 0.0, 0.0) if self.eyebar else
                      ("member", given.member_width, given.member_corner_cut, given.member_edge))
         for name, width, cut, edge in parts:
             if width <= self.d_h + 0.25:
-                raise InputError(f"the {name} is {units.fraction(width)} in wide: less than 1/8 in would be left on each side of a hole of "
+                raise InputError(f"the {name} is {units.fraction(width, unit=' in')} wide: less than 1/8 in would be left on each side of a hole of "
                                  f"{units.printed(self.d_h)} in")
             most = min((width - given.pin_diameter) / 2, edge + self.d_h / 2)
             if cut > most + 1e-9:
-                raise InputError(f"{name}_corner_cut = {units.fraction(cut)} in cuts into the shear planes beyond the pin or the width beside it; "
+                raise InputError(f"{name}_corner_cut = {units.fraction(cut, unit=' in')} cuts into the shear planes beyond the pin or the width beside it; "
                                  f"at most {units.printed(most)} in")
         if given.pin_shear != "both" and len(given.pin_shear_basis.strip()) < 10:
             raise InputError("pin_shear other than both needs a written basis in pin_shear_basis")
@@ -99,9 +100,10 @@ class PinnedConnection(Connection):
                                          given.head_diameter, given.head_radius, d_h, given.eyebar_clamped)
         else:
             of_member = pin_plate.PinPlate("member", title, given.member_plates, member.F_y, member.F_u, given.member_thickness,
-                                           given.member_width, given.member_edge if edge is None else edge, d_h, given.member_corner_cut)
+                                           given.member_width, given.member_edge if edge is None else edge, d_h, given.member_corner_cut,
+                                           constants(self.basis).beside_pin)
         of_support = pin_plate.PinPlate("support", "Support", 3 - given.member_plates, support.F_y, support.F_u, given.support_thickness,
-                                        given.support_width, given.support_edge, d_h, given.support_corner_cut)
+                                        given.support_width, given.support_edge, d_h, given.support_corner_cut, constants(self.basis).beside_pin)
         outer, inner = (of_support, of_member) if inside else (of_member, of_support)
         made = pin.Pin(given.pin_diameter, self.pin_material.F_y, self.pin_material.F_u, outer.t, inner.t, given.gap)
         return PinnedJoint(of_member, of_support, made)
@@ -147,6 +149,12 @@ class PinnedConnection(Connection):
         else:
             yield from pin_plate.rules(joint.member, d, self.basis.edition, given.moves_under_load)
         yield from pin_plate.rules(joint.support, d, self.basis.edition, given.moves_under_load)
+
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: member and support plates at the pin hole."""
+        member, support = self.joint.member, self.joint.support
+        return (fatigue.at_pin("member", "Eyebar" if self.eyebar else "Member", member, member.head if self.eyebar else member.w),
+                fatigue.at_pin("support", "Support", support, support.w))
 
     # What the report says beside the checks
 
@@ -195,16 +203,16 @@ class PinnedConnection(Connection):
         n, m = given.member_plates, 3 - given.member_plates
         if self.eyebar:
             member = (f"{n} eyebar{'s' if n > 1 else ''} {f(given.member_thickness)} x {f(given.member_width)}, {self.member_material.name}, head "
-                      f"{f(given.head_diameter)} in diameter, transition radius {f(given.head_radius)} in")
+                      f"{f(given.head_diameter, unit=' in')} diameter, transition radius {f(given.head_radius, unit=' in')}")
         else:
             member = _plate(n, given.member_thickness, given.member_width, self.member_material, given.member_edge, given.member_corner_cut)
         support = _plate(m, given.support_thickness, given.support_width, self.support_material, given.support_edge, given.support_corner_cut)
         fit = "the parts turn under full load" if given.moves_under_load else "no turning under full load"
         return [("Member", member), ("Support", support),
-                ("Pin", f"{f(given.pin_diameter)} in diameter, {self.pin_material.name}; length between its retainers at least "
-                        f"{f(joint.pin.grip)} in"),
+                ("Pin", f"{f(given.pin_diameter, unit=' in')} diameter, {self.pin_material.name}; length between its retainers at least "
+                        f"{f(joint.pin.grip, unit=' in')}"),
                 ("Holes", f"{units.printed(self.d_h)} in diameter, {units.printed(given.hole_clearance)} in larger than the pin; {fit}"),
-                ("Gap", f"{f(given.gap)} in on each side of the inner ply")]
+                ("Gap", f"{f(given.gap, unit=' in')} on each side of the inner ply")]
 
     @property
     def design(self):
@@ -246,8 +254,8 @@ class PinnedConnection(Connection):
 
 def _plate(n, t, w, material, edge, cut):
     f = units.fraction
-    return (f"{n} PL {f(t)} x {f(w)}, {material.name}, {f(edge)} in from the hole's edge to the end"
-            + (f", corners cut {f(cut)} in at 45 degrees" if cut else ", square corners"))
+    return (f"{n} PL {f(t)} x {f(w)}, {material.name}, {f(edge, unit=' in')} from the hole's edge to the end"
+            + (f", corners cut {f(cut, unit=' in')} at 45 degrees" if cut else ", square corners"))
 
 
 CONNECTION = PinnedConnection

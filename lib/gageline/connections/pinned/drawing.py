@@ -10,7 +10,7 @@ from ...provisions import pin_plates, pins
 from ...units import ceil_figures, fraction, printed, ratio_text
 from .. import pin_plate
 
-TALLEST, LARGEST = 3.5, 0.5  # [in] of an elevation on paper; scale
+TALLEST, LARGEST = 3.0, 0.5  # [in] of an elevation on paper; scale
 SIGN = {"LRFD": "Pᵤ", "ASD": "Pₐ"}
 WORDS = {"tension": "tensile rupture beside the hole, torn along the dashed lines",
          "shear": "shear rupture beyond the hole, sheared along the heavy lines",
@@ -54,7 +54,7 @@ def _path(paper, plate, d, path, sense):
     """Draw the path of a limit state of a plate; ``sense`` is 1 where its end lies at positive x."""
     r = plate.d_h / 2
     if path == "tension":
-        b_e = pin_plates.effective_edge_width.bare(plate.t, pin_plate.B_0, pin_plates.edge_width.bare(plate.w, plate.d_h))
+        b_e = pin_plates.effective_edge_width.bare(plate.t, plate.b_0, pin_plates.edge_width.bare(plate.w, plate.d_h))
         for side in (-1, 1):
             paper.line([(0, side * r), (0, side * (r + b_e))], style.HEAVY, style.TORN, style.ACCENT, z=6.9, gid="torn")
     elif path == "shear":
@@ -174,8 +174,8 @@ def elevation(connection):
     said = f"{check.title.partition(',')[0].lower()}, {WORDS[check.path]} (D/C {ratio_text(check.ratio)}{governs})"
     caption = f"Elevation, to scale; dimensions in inches, along the load from the edge of the hole. Marked: {said}."
     given = connection.inputs
-    alt = (f"Elevation of {connection.subject} {fraction(given.member_width)} in wide and its support plates on a pin of "
-           f"{fraction(given.pin_diameter)} in. Marked: {said}.")
+    alt = (f"Elevation of {connection.subject} {fraction(given.member_width, unit=' in')} wide and its support plates on a pin of "
+           f"{fraction(given.pin_diameter, unit=' in')}. Marked: {said}.")
     return style.Figure(svg, caption, alt, width)
 
 
@@ -269,6 +269,6 @@ def section(connection):
     load = f"{SIGN[connection.basis.method]} = {ceil_figures(P)} kip"
     caption = (f"Section along the pin, to scale; right, its bending moment under {load}: half of the load on an arm of {arm:.4g} in, "
                f"{most} kip·in. The darker ply is the member.")
-    alt = (f"Section along a pin of {fraction(pin.d)} in through two outer plies of {fraction(pin.t_outer)} in and an inner ply of "
-           f"{fraction(pin.t_inner)} in, gaps {fraction(pin.gap)} in; its moment is {most} kip inches.")
+    alt = (f"Section along a pin of {fraction(pin.d, unit=' in')} through two outer plies of {fraction(pin.t_outer, unit=' in')} and an inner ply of "
+           f"{fraction(pin.t_inner, unit=' in')}, gaps {fraction(pin.gap, unit=' in')}; its moment is {most} kip inches.")
     return style.Figure(svg, caption, alt, width)

@@ -2,7 +2,7 @@
 
 from dataclasses import dataclass
 
-from ... import loads, units
+from ... import units
 from ...check import Working, not_applicable, strength_check
 from ...editions import CLAUSES
 from ...errors import InputError, NotInTable, ScopeError
@@ -10,8 +10,9 @@ from ...facts import grades
 from ...facts import rods as facts
 from ...facts import welds as weld_facts
 from ...provisions import rods, tension
-from .. import pin, pin_plate
+from .. import fatigue, pin, pin_plate
 from ..base import Connection
+from ..joint import constants
 from ..outcome import worked
 from .attachments import BESIDE_NUT, Lug, Nut, lug_rules, lug_states, nut_reasons, nut_states
 from .inputs import ENDS, RodInputs, checked, given_washer
@@ -59,8 +60,8 @@ class RodConnection(Connection):
         if inputs.thread_strength == "tensile stress area" and self.basis.edition == "360-16":
             raise ScopeError("thread_strength = 'tensile stress area': 360-16 gives threads 0.75 F_u on the body area only (Table J3.2)")
         if inputs.body_diameter is not None and inputs.body_diameter > self.thread.d + 1e-9:
-            raise InputError(f"body_diameter = {units.fraction(inputs.body_diameter)} in is more than the thread's "
-                             f"{units.fraction(self.thread.d)} in; give the diameter of the thread as rod")
+            raise InputError(f"body_diameter = {units.fraction(inputs.body_diameter, unit=' in')} is more than the thread's "
+                             f"{units.fraction(self.thread.d, unit=' in')}; give the diameter of the thread as rod")
         self.material = self._material(inputs.rod_grade, ("rod",), self.thread.d)
         self.materials = {}
         self.rod = RodDesign(self.thread.d, inputs.body_diameter or self.thread.d, self.thread.tpi, self.thread.metric, self.material.F_y,
@@ -87,19 +88,19 @@ class RodConnection(Connection):
         d, hole = self.thread.d, self._of(end, "hole") or facts.standard_hole(self.thread.d)
         w_n, washer = facts.nut_width(d, self.inputs.nut), None
         if hole < d - 1e-9:
-            raise InputError(f"{end}_hole = {units.fraction(hole)} in is smaller than the rod, {units.fraction(d)} in")
+            raise InputError(f"{end}_hole = {units.fraction(hole, unit=' in')} is smaller than the rod, {units.fraction(d, unit=' in')}")
         if given_washer(self.inputs, end):
             w_w, t_w = self._of(end, "washer"), self._of(end, "washer_thickness")
             steel = self.materials[f"{end} plate washer"] = self._material(self._of(end, "washer_grade"), ("plate", "bar"), t_w)
             washer = (w_w, t_w, steel.F_y, d + WASHER_HOLE)
             if not max(w_n, hole + BESIDE_NUT) < w_w <= w:
-                raise InputError(f"{end}_washer = {units.fraction(w_w)} in must be wider than the nut, {units.printed(w_n)} in, and than the hole by "
-                                 f"1/8 in, and not wider than the plate, {units.fraction(w)} in")
+                raise InputError(f"{end}_washer = {units.fraction(w_w, unit=' in')} must be wider than the nut, {units.printed(w_n)} in, and than the hole by "
+                                 f"1/8 in, and not wider than the plate, {units.fraction(w, unit=' in')}")
         elif hole > w_n - BESIDE_NUT + 1e-9:
-            raise InputError(f"{end}_hole = {units.fraction(hole)} in leaves the nut, {units.printed(w_n)} in wide, less than 1/16 in all round; "
+            raise InputError(f"{end}_hole = {units.fraction(hole, unit=' in')} leaves the nut, {units.printed(w_n)} in wide, less than 1/16 in all round; "
                              f"give a plate washer ({end}_washer)")
         if w <= max(w_n, hole):
-            raise InputError(f"{end}_width = {units.fraction(w)} in: the plate is narrower than the nut, {units.printed(w_n)} in")
+            raise InputError(f"{end}_width = {units.fraction(w, unit=' in')}: the plate is narrower than the nut, {units.printed(w_n)} in")
         return Nut(end, w_n, hole, plate.F_y, t, w, self._of(end, "span"), washer)
 
     def _lug(self, end, plate, t, w):
@@ -109,9 +110,10 @@ class RodConnection(Connection):
             raise ScopeError(f"{end}_hole_clearance = {units.printed(clearance)} in: D5 covers pin holes up to "
                              f"{'1/32' if self.basis.edition == '360-16' else '1/16'} in larger than the pin")
         if w <= d + clearance + 0.25:
-            raise InputError(f"{end}_width = {units.fraction(w)} in leaves less than 1/8 in on each side of the pin hole")
+            raise InputError(f"{end}_width = {units.fraction(w, unit=' in')} leaves less than 1/8 in on each side of the pin hole")
         steel = self.materials[f"{end} pin"] = self._material(self._of(end, "pin_grade"), ("rod", "bar"), d)
-        made = pin_plate.PinPlate(end, f"{end.capitalize()} lug", 1, plate.F_y, plate.F_u, t, w, self._of(end, "edge"), d + clearance)
+        made = pin_plate.PinPlate(end, f"{end.capitalize()} lug", 1, plate.F_y, plate.F_u, t, w, self._of(end, "edge"), d + clearance,
+                                  b_0=constants(self.basis).beside_pin)
         F_EXX = weld_facts.electrode(self.inputs.lug_electrode).F_EXX
         try:
             above = weld_facts.classes_above_matching(F_EXX, self._of(end, "grade"), t)
@@ -180,13 +182,6 @@ class RodConnection(Connection):
                                notes=("Upset ends: by older editions 0.75 Fu on the thread's body area was to exceed Fy on the area of the body; "
                                       "good practice still.",))
 
-    def service_tension(self):
-        """Return (tension at service load, in words where from), for the elongation. [kip]"""
-        if isinstance(self.demand, loads.Demands):
-            found = loads.demands(self.inputs.service(), "ASD", self.basis.loads, **self.inputs.load_options())
-            return found.required_tension, "the largest ASD combination"
-        return self.demand.required_tension, f"the given demand, {self.demand.level}"
-
     def _elongation(self):
         id, title, clause, length = "rod elongation", "Rod, elongation at service load", "statics", self.inputs.rod_length
         if length is None:
@@ -199,6 +194,20 @@ class RodConnection(Connection):
         limit = self.inputs.elongation_limit
         return pin_plate.limit(id, title, "rod", clause, limit, Delta, do.steps, at_most=True, kind="advice",
                                notes=(f"Elongation of the rod's body under {where}, {units.ceil_figures(P_s)} kip; attachments not counted.",))
+
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: the thread, and lugs at their pin and at their welds."""
+        rod, thread = self.rod, self.thread
+        out = [fatigue.Detail("thread", "thread of the rod", "rod", "G", "Table A-3.1, 8.5",
+                              lambda do: fatigue.thread(do, thread.d, thread.tpi, thread.metric, 1), F_y=rod.F_y)]
+        for end in ENDS:
+            if self.lug(end):
+                lug = getattr(rod, end)
+                out += [fatigue.at_pin(end, f"{end} lug", lug.plate, lug.plate.w),
+                        fatigue.Detail(f"{end} weld", f"{end} lug, root of its welds", end, "C", "Table A-3.1, 5.7, by its equation for fillets",
+                                       (f"{end} yielding", "A_g"), root=(lug.w_f, lug.plate.t)),
+                        fatigue.throats(end, f"{end} lug, welds", f"{end} weld")]
+        return out
 
     # What the report says beside the checks
 
@@ -253,7 +262,7 @@ class RodConnection(Connection):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, f = self.inputs, units.fraction
         thread = self.thread.name + ("" if self.thread.metric else f" in, {self.thread.tpi:g} threads per inch (UNC)")
-        body = "" if self.rod.d_y >= self.rod.d - 1e-9 else f", body {f(self.rod.d_y)} in"
+        body = "" if self.rod.d_y >= self.rod.d - 1e-9 else f", body {f(self.rod.d_y, unit=' in')}"
         long = "" if given.rod_length is None else f", {units.feet(given.rod_length)} long"
         return [("Rod", f"{thread}, {self.material.name}{body}{long}"), *((f"{end.capitalize()} end", self._built(end)) for end in ENDS)]
 
@@ -261,14 +270,14 @@ class RodConnection(Connection):
         f, part = units.fraction, getattr(self.rod, end)
         steel = self.materials[f"{end} {'lug' if self.lug(end) else 'plate'}"].name
         if self.lug(end):
-            return (f"lug PL {f(part.plate.t)} x {f(part.plate.w)}, {steel}, {f(part.plate.a)} in from the hole's edge to the end; "
-                    f"pin {f(part.pin.d)} in, {self.materials[f'{end} pin'].name}, in a hole of {units.printed(part.plate.d_h)} in; "
-                    f"fillet welds {f(part.w_f)} in on both faces; clevis by its maker")
+            return (f"lug PL {f(part.plate.t)} x {f(part.plate.w)}, {steel}, {f(part.plate.a, unit=' in')} from the hole's edge to the end; "
+                    f"pin {f(part.pin.d, unit=' in')}, {self.materials[f'{end} pin'].name}, in a hole of {units.printed(part.plate.d_h)} in; "
+                    f"fillet welds {f(part.w_f, unit=' in')} on both faces; clevis by its maker")
         washer = ""
         if part.washer:
             washer = f", plate washer {f(part.washer[1])} x {f(part.washer[0])} square, {self.materials[f'{end} plate washer'].name}"
-        span = "" if part.span is None else f", span {f(part.span)} in"
-        return f"{self.inputs.nut} nut on PL {f(part.t)} x {f(part.w)}, {steel}, hole {f(part.d_h)} in{span}{washer}"
+        span = "" if part.span is None else f", span {f(part.span, unit=' in')}"
+        return f"{self.inputs.nut} nut on PL {f(part.t)} x {f(part.w)}, {steel}, hole {f(part.d_h, unit=' in')}{span}{washer}"
 
     @property
     def design(self):

@@ -6,7 +6,6 @@ from itertools import pairwise
 from ...figures import style
 from ...figures.drafting import Drawing, broken
 from ...units import ceil_figures, fraction, printed, ratio_text
-from .. import pin_plate
 from .attachments import Nut
 from .inputs import ENDS
 
@@ -134,7 +133,7 @@ def _draw_lug(paper, end, check):
     if check.part == end.end and check.path in ("tension", "shear"):
         if check.path == "shear":
             paper.fill(end.at((-pin_d / 2, 0), (pin_d / 2, 0), (pin_d / 2, -end.tip), (-pin_d / 2, -end.tip)), style.SHADE, 2.5)
-        b_e = min(2 * plate.t + pin_plate.B_0, plate.w / 2 - r)
+        b_e = min(2 * plate.t + plate.b_0, plate.w / 2 - r)
         for side in (-1, 1):
             torn = [(side * r, 0), (side * (r + b_e), 0)]
             line = torn if check.path == "tension" else [(side * pin_d / 2, 0), (side * pin_d / 2, -end.tip)]

@@ -8,10 +8,11 @@ import numpy as np
 
 from ... import units
 from ...check import not_applicable, silent, strength_check
-from ...errors import InputError
+from ...errors import InputError, ScopeError
 from ...facts import grades, hollow
 from ...facts import welds as filler
 from ...facts.shapes import shape as find_shape
+from .. import fatigue
 from .. import plate as plates
 from ..base import Connection, Sweep
 from ..joint import Gusset
@@ -165,7 +166,7 @@ class SlottedConnection(Connection):
         reasons = {"member block": "every wall is sheared along its weld line; the small part torn across a wall is not counted: J4.2 is checked"}
         if not self._long_slot(joint):
             reasons["slot yielding"] = "the tube is not slotted" if not joint.concentric else \
-                f"the slotted length without welds of {units.fraction(joint.unwelded)} in is not more than the tube's depth: its yielding would " \
+                f"the slotted length without welds of {units.fraction(joint.unwelded, unit=' in')} is not more than the tube's depth: its yielding would " \
                 "not lengthen the member by much, so rupture governs it"
         if joint.reinforcement is None:
             reasons |= dict.fromkeys(("rupture beyond plates", "plates weld"), "no reinforcing plates")
@@ -179,7 +180,7 @@ class SlottedConnection(Connection):
         if not joint.concentric:
             return ()
         notes = [f"The slot is deducted whether or not the weld closes its end; slotted length without welds "
-                 f"{units.fraction(joint.unwelded)} in." if not self.inputs.end_return else
+                 f"{units.fraction(joint.unwelded, unit=' in')}." if not self.inputs.end_return else
                  "The slot is deducted although the welds return round the gusset's edge and close it: the return is not counted."]
         if joint.reinforcement is None:
             notes += advice.reinforcement(joint, T, nominal, state, self.basis.method)
@@ -197,6 +198,16 @@ class SlottedConnection(Connection):
             else:
                 found = evaluate(joint)
                 yield strength_check(id, title, part, clause, "compression", method, found.nominal, C, found.steps, True, tension=False)
+
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: tube and gusset at the ends of the welds, and their throats."""
+        joint, given = self.joint, self.inputs
+        if joint.reinforcement is not None:
+            raise ScopeError("fatigue of a net section reinforced by plates: Table A-3.1 has no case of it; lengthen the welds or thicken the tube")
+        note = "Category of longitudinal fillets (4.1) by analogy: the table has no slotted tube; to be confirmed against the standard."
+        return (fatigue.weld_ends("member", "Tube", joint.tube.t, ("member rupture", "A_e"), joint.tube.F_y, note),
+                fatigue.weld_ends("plate", "Gusset", given.plate_thickness, ("Whitmore yielding", "A_g"), self.plate_material.F_y),
+                fatigue.throats("weld", "Welds", "weld"))
 
     # What the report says beside the checks
 
@@ -251,7 +262,7 @@ class SlottedConnection(Connection):
         grid = np.arange(math.ceil(low * 8 - 1e-9), math.floor(max(1.5 * l, 2.2 * tube.depth) * 8) + 1) / 8
         grid = grid[np.broadcast_to(member.shear_lag_of_net_section(silent, self.at(grid)), grid.shape) > 0.05]
         lengths = np.unique(np.append(grid, l))
-        return Sweep(lengths, self.at(lengths), int(np.searchsorted(lengths, l)), lambda i: f"four welds of {units.fraction(lengths[i])} in",
+        return Sweep(lengths, self.at(lengths), int(np.searchsorted(lengths, l)), lambda i: f"four welds of {units.fraction(lengths[i], unit=' in')}",
                      label="length l of each weld line, in")
 
     def at(self, l):

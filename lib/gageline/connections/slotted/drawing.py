@@ -10,7 +10,7 @@ from ...figures import style
 from ...figures.drafting import Drawing, broken
 from ...units import ceil_figures, fraction, ratio_text
 
-TALLEST, LARGEST = 3.5, 0.5
+TALLEST, LARGEST = 3.1, 0.5
 """Height of a drawing on paper and largest scale. [in]"""
 
 ALONG_WELDS = ("weld", "wall shear yielding", "wall shear rupture", "plate shear yielding", "plate shear rupture")
@@ -232,8 +232,8 @@ def elevation(c):
     ratio = ratio_text(governs.ratio)
     caption = f"Elevation in the plane of the gusset, to scale; dimensions in inches. Heavy: {marked} (D/C {ratio}, which governs)."
     how = "slotted over one gusset" if joint.concentric else "between two gussets"
-    alt = (f"Elevation of {joint.tube.name} {how} {fraction(joint.plate.t)} in thick and {fraction(joint.plate.width)} in wide, with four "
-           f"fillet welds of {fraction(joint.leg)} in, {fraction(joint.l)} in long. Marked: {marked}, D/C {ratio}.")
+    alt = (f"Elevation of {joint.tube.name} {how} {fraction(joint.plate.t, unit=' in')} thick and {fraction(joint.plate.width, unit=' in')} wide, with four "
+           f"fillet welds of {fraction(joint.leg, unit=' in')}, {fraction(joint.l, unit=' in')} long. Marked: {marked}, D/C {ratio}.")
     return style.Figure(svg, caption, alt, width)
 
 
@@ -323,7 +323,7 @@ def _section_labels(paper, c, out_x, reach, X, Y):
               f"{tube.name}, t = {tube.t:.3g}")]
     if joint.concentric:
         texts.append(((joint.plate.t / 2 + joint.leg * 0.4, Y + joint.leg * 0.3), f"4 fillets {fraction(joint.leg)}"))
-        texts.append(((0.0, 0.5 * Y), f"PL {fraction(joint.plate.t)} in a slot of {fraction(joint.plate.t + given.slot_clearance)}"))
+        texts.append(((0.0, 0.5 * Y), f"PL {fraction(joint.plate.t, unit=' in')} a slot of {fraction(joint.plate.t + given.slot_clearance)}"))
     else:
         texts.append(((X + joint.leg * 0.4, joint.plate.width / 2 + joint.leg * 0.3), f"4 fillets {fraction(joint.leg)}"))
         texts.append(((X + joint.plate.t / 2, 0.3 * Y), f"2 PL {fraction(joint.plate.t)} x {fraction(joint.plate.width)}"))
@@ -352,5 +352,5 @@ def section(c):
     joint = c.joint
     caption = "Section through the welds, to scale; dimensions in inches. Welds black."
     how = "a slot in each of two walls, the gusset through both" if joint.concentric else "a gusset on each side"
-    alt = f"Section of {joint.tube.name}, wall {joint.tube.t:.3g} in, with {how}, {fraction(joint.plate.t)} in thick, and four fillet welds."
+    alt = f"Section of {joint.tube.name}, wall {joint.tube.t:.3g} in, with {how}, {fraction(joint.plate.t, unit=' in')} thick, and four fillet welds."
     return style.Figure(svg, caption, alt, width)

@@ -1,6 +1,7 @@
 """A bolted tension splice with plates on flanges, web, or a flat member; both halves alike, the load shared by areas."""
 
 from dataclasses import replace
+from functools import partial
 
 from ... import units
 from ...check import not_applicable, silent, strength_check
@@ -8,7 +9,8 @@ from ...editions import CLAUSES
 from ...errors import InputError
 from ...facts import bolts as facts
 from ...facts import grades, shapes
-from .. import bolt_group, details
+from ...provisions.fatigue import share_of_range
+from .. import bolt_group, details, fatigue
 from ..base import Connection, Sweep, Table
 from ..element import element
 from . import design as layout
@@ -140,6 +142,17 @@ class SpliceConnection(Connection):
                           part=group.name,
                           notes=notes)
 
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: member and splice plates at their bolts."""
+        how, splice = self.inputs.installation, self.design
+        fatigue.refuse_snug(how)
+        out = [fatigue.at_bolts("member", "Member", "member yielding", "member rupture", how, splice.F_y)]
+        for group in splice.groups:
+            force = None if group.alone else partial(_shared_range, states.share(silent, splice, group))
+            out.append(fatigue.at_bolts(group.name, f"{self.named(group.name)}, plates", f"{group.name} Whitmore yielding",
+                                        f"{group.name} Whitmore rupture", how, group.joint.plate.F_y, force))
+        return out
+
     # What the report says beside the checks
 
     def assumptions(self):
@@ -160,7 +173,7 @@ class SpliceConnection(Connection):
             notes.append((f"Splice plates in compression: K = {states.K_PLATE} between the rows beside the joint.", "published design example"))
         for group in splice.groups:
             if group.joint.t_filler:
-                notes.append((f"Fillers of {units.fraction(group.joint.t_filler)} in at a shear plane of the {group.name}, not developed "
+                notes.append((f"Fillers of {units.fraction(group.joint.t_filler, unit=' in')} at a shear plane of the {group.name}, not developed "
                               "outside the joint.", "input"))
         if self.member_material.note:
             notes.append((f"Member steel {self.member_material.name}: {self.member_material.note}", "availability, from memory"))
@@ -185,7 +198,7 @@ class SpliceConnection(Connection):
     def designed(self):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, splice = self.inputs, self.design
-        rows = [("Member", f"{self.element.member}, {self.member_material.name}; gap between the halves {units.fraction(given.joint_gap)} in")]
+        rows = [("Member", f"{self.element.member}, {self.member_material.name}; gap between the halves {units.fraction(given.joint_gap, unit=' in')}")]
         product = self.bolt_group.product or self.bolt_group.name
         for group in splice.groups:
             ply, joint = group.joint.plate, group.joint
@@ -228,11 +241,16 @@ class SpliceConnection(Connection):
 
         def describe(i):
             rows = " and ".join(f"{group.rows} rows in the {group.name if self.design.section else 'plates'}" for group in designs[i].groups)
-            return f"{rows}, l = {units.fraction(lengths[i])} in"
+            return f"{rows}, l = {units.fraction(lengths[i], unit=' in')}"
 
         return Sweep(lengths, designs, more.index(0), describe,
                      label=f"length of the {'flange' if groups[0].name == 'flange' else 'bolt'} group on one side, in",
                      marks=tuple(f"{joint.rows} rows" for joint in joints))
+
+
+def _shared_range(xi, do, P):
+    """Work out the share of a range of force that a group carries. [kip]"""
+    return do(share_of_range, xi, P)
 
 
 CONNECTION = SpliceConnection

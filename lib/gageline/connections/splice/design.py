@@ -8,7 +8,7 @@ from ...errors import InputError, ScopeError
 from ...facts import bolts as facts
 from ...geometry import End, Hole, centred_edge, closest_pair, grid, mirrored, outside
 from ..element import element
-from ..joint import Bolts, Gusset, Joint, Ply
+from ..joint import Bolts, Gusset, Joint, Ply, constants
 
 NAMES = ("flange", "web")
 
@@ -82,13 +82,13 @@ def _group(c, name, alone, more_rows):
     plate_across, plate_along = _hole(c, given.plate_holes)
     member = Ply("member", c.member_material.F_y, c.member_material.F_u, part.t, 1, part.pieces,
                  tuple(Hole(x, y, across, along, part.t) for x, y in centres),
-                 End((rows - 1) * pitch + value["member_end"]), part.width, given.member_holes)
+                 End((rows - 1) * pitch + value["member_end"]), part.width, given.member_holes, constants(c.basis))
     t, width = value["plate_thickness"], value["plate_width"]
     steel = c.plate_material(t)
     low = part.width / 2 - width / 2
     shifted = [Hole(x, y - low, plate_across, plate_along, t) for x, y in centres]
     plate = Ply("plate", steel.F_y, steel.F_u, t, plates, plates * part.joints, tuple(mirrored(shifted)), End(value["plate_end"]), width,
-                given.plate_holes)
+                given.plate_holes, constants(c.basis))
     slip = given.installation == "slip-critical"
     group = c.bolt_group
     bolts = Bolts(c.size.name, group.name, c.size.d, group.F_nv_X if given.threads == "X" else group.F_nv_N, given.threads, plates,
@@ -130,7 +130,7 @@ def _layout(c, group):
     joint, name = group.joint, group.name
     for ply in (joint.member, joint.plate):
         if outside(list(ply.holes), ply.width, ply.end):
-            raise InputError(f"{name} splice: a hole is cut by an edge of the {ply.name}, {units.fraction(ply.width)} in wide; "
+            raise InputError(f"{name} splice: a hole is cut by an edge of the {ply.name}, {units.fraction(ply.width, unit=' in')} wide; "
                              f"change {name}_gage or the part")
     pair = closest_pair(joint.pattern)
     if pair and pair.spacing < 8 / 3 * c.size.d - 1e-9:
@@ -138,7 +138,7 @@ def _layout(c, group):
                          f"{units.printed(8 / 3 * c.size.d)} in ({CLAUSES['minimum spacing'][c.basis.edition]})")
     shape = c.element.section
     if name == "web" and shape is not None and joint.plate.width > shape.d - 2 * shape.k_des + 1e-9:
-        raise InputError(f"web_plate_width = {units.fraction(joint.plate.width)} in: between the fillets of {shape.name} there is room for "
+        raise InputError(f"web_plate_width = {units.fraction(joint.plate.width, unit=' in')}: between the fillets of {shape.name} there is room for "
                          f"{units.printed(shape.d - 2 * shape.k_des)} in")
     if name == "flange":
         faces = [hole.y for hole in joint.pattern if shape.t_w / 2 >= abs(hole.y - shape.b_f / 2) - 1e-9]

@@ -11,7 +11,7 @@ from ...figures.elevation import elevation as joint_elevation
 from ...geometry import lines_of
 from ...units import ceil_figures, fraction
 
-TALLEST, LARGEST = 3.4, 0.3  # [in] of the whole splice on paper; scale beyond which a small one looks coarse
+TALLEST, LARGEST = 3.0, 0.3  # [in] of the whole splice on paper; scale beyond which a small one looks coarse
 WIDEST, SECTION_TALLEST, SECTION_LARGEST = 3.6, 2.7, 0.4  # [in], [in], scale of the section
 HEAD, NUT = 0.625, 1.3  # height of a bolt's head, and of nut with thread end, in diameters, about; for drawing only
 
@@ -282,7 +282,7 @@ def section(connection):
     with style.house():
         drawn = section_canvas(connection)
         svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
-    said = "; ".join(f"{group.joint.plate.pieces} plates {fraction(group.joint.plate.t)} by {fraction(group.joint.plate.width)} in"
+    said = "; ".join(f"{group.joint.plate.pieces} plates {fraction(group.joint.plate.t)} by {fraction(group.joint.plate.width, unit=' in')}"
                      for group in connection.design.groups)
     return style.Figure(svg, "Section of the splice at rows of bolts, to scale; fillets of the shape not shown, bolts drawn simplified.",
                         f"Section of {connection.element.member} with {said}.", width)

@@ -4,7 +4,6 @@ from ...check import Working, silent
 from ...geometry import Part
 from ...provisions import connecting, shear_lag, splices, tension
 from .. import bolt_group, net_section, plate, tear_out
-from ..joint import DAMAGE
 from ..outcome import Outcome, worked
 
 K_PLATE = 0.65
@@ -26,7 +25,7 @@ def member_rupture(splice):
         A_h = None
         for group in splice.groups:
             ply, joint = group.joint.member, group.joint
-            d_n = do(tension.hole_width, ply.hole.across, DAMAGE)
+            d_n = do(tension.hole_width, ply.hole.across, ply.constants.damage)
             number = joint.n_lines * ply.pieces
             A_h = do(tension.first_hole_loss, number, d_n, ply.t) if A_h is None else do(tension.hole_loss, A_h, number, d_n, ply.t)
         A_n = do(tension.net_area_straight, splice.A_g, A_h)

@@ -6,8 +6,9 @@ import numpy as np
 
 from ... import units
 from ...check import not_applicable, strength_check
+from ...errors import ScopeError
 from ...facts import grades
-from .. import plate, weld_group
+from .. import fatigue, plate, weld_group
 from ..base import Connection, Sweep, Table
 from ..element import element
 from . import layout, limits, strengths
@@ -111,6 +112,19 @@ class WeldedConnection(Connection):
         found = plate.compression(self.end)
         return strength_check(id, title, "plate", clause, "compression", self.basis.method, found.nominal, C, found.steps, True, tension=False)
 
+    def fatigue_details(self, by_id):
+        """Return the details that live load may crack: member and plate at the ends of the welds, and their throats."""
+        end = self.end
+        if end.across or not end.sided:
+            raise ScopeError(f"welds = {self.inputs.welds!r}: Table A-3.1 has no case of a lap joint with transverse fillets; use longitudinal ones only")
+        if self.element.series in layout.ANGLES and not end.concentric:
+            raise ScopeError("the welds of the angle do not balance on its centroid, as case 4.1 of Table A-3.1 and J1.7 ask under cyclic load; "
+                             "give weld_balanced")
+        note = "" if self.element.eccentricity is None else "Shear lag lowers the area; bending from the eccentricity across the plate is in it only so far."
+        return (fatigue.weld_ends("member", "Member", self.element.t, ("member rupture", "A_e"), end.member.F_y, note),
+                fatigue.weld_ends("plate", "Plate", self.inputs.plate_thickness, ("Whitmore yielding", "A_g"), end.plate.F_y),
+                fatigue.throats("weld", "Welds", "weld"))
+
     # What the report says beside the checks
 
     def assumptions(self):
@@ -171,15 +185,15 @@ class WeldedConnection(Connection):
     def designed(self):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, end, part = self.inputs, self.end, self.element
-        leg = units.fraction(end.w_f)
+        leg = units.fraction(end.w_f, unit=" in")
         if not end.sided:
-            welds = f"{leg} in fillet across the end of the member and across the end of the plate, {units.fraction(end.g)} in each"
+            welds = f"{leg} fillet across the end of the member and across the end of the plate, {units.fraction(end.g, unit=' in')} each"
         elif end.equal:
-            welds = f"{leg} in fillet along both edges, {units.fraction(end.l_1)} in each"
+            welds = f"{leg} fillet along both edges, {units.fraction(end.l_1, unit=' in')} each"
         else:
-            welds = f"{leg} in fillet, {units.fraction(end.l_1)} in along the {end.edges[0]}, {units.fraction(end.l_2)} in along the {end.edges[1]}"
+            welds = f"{leg} fillet, {units.fraction(end.l_1, unit=' in')} along the {end.edges[0]}, {units.fraction(end.l_2, unit=' in')} along the {end.edges[1]}"
         if end.across == 1:
-            welds += f", and {units.fraction(end.g)} in across the end of the {'plate' if end.on_plate else 'member'}"
+            welds += f", and {units.fraction(end.g, unit=' in')} across the end of the {'plate' if end.on_plate else 'member'}"
         if end.groups > 1:
             welds += f"; {end.groups} groups alike"
         member = f"{part.member}, {self.member_material.name}"
@@ -188,7 +202,7 @@ class WeldedConnection(Connection):
         plates = f"{end.plate.pieces} PL {units.fraction(given.plate_thickness)} x {units.fraction(given.plate_width)}, {self.plate_material.name}"
         return [("Member", member), ("Plates", plates),
                 ("Welds", welds), ("Filler metal", f"{self.electrode.name}, equal legs"),
-                ("Lap", f"{units.fraction(end.lap)} in along the load")]
+                ("Lap", f"{units.fraction(end.lap, unit=' in')} along the load")]
 
     @property
     def design(self):

@@ -9,7 +9,7 @@ from ...figures.scene import outline
 from ...geometry import Whitmore
 from ...units import ceil_figures, fraction, ratio_text
 
-TALLEST, LARGEST = 3.4, 0.42  # [in] of an elevation on paper; scale beyond which a small joint looks coarse
+TALLEST, LARGEST = 3.0, 0.42  # [in] of an elevation on paper; scale beyond which a small joint looks coarse
 INDENT = 40  # [pt] of the first weld symbol
 BACK_OFF = 1.4  # plate drawn beside the member, as a part of its depth, before it is broken off
 

@@ -124,7 +124,7 @@ def cross_section(connection):
         drawn = section_canvas(connection)
         svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
     count = f"{end.plate.pieces} plates" if end.plate.pieces > 1 else "a plate"
-    plate = f"{count} {fraction(end.plate.t)} x {fraction(end.plate.width)} in"
+    plate = f"{count} {fraction(end.plate.t)} x {fraction(end.plate.width, unit=' in')}"
     where = "through the longitudinal welds" if end.sided else "of the lapped parts, between the welds across"
     return style.Figure(svg, f"Cross-section {where}, to scale; dimensions in inches, fillets black.",
                         f"Cross-section of {end.element.member} welded by its {end.element.name} to {plate}.", width)
