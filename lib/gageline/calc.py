@@ -7,7 +7,7 @@ import html
 import json
 from functools import cached_property
 
-from . import cells, families, identity, presenting, project, signoffs, store, study
+from . import cells, families, identity, presenting, project, reviewing, signoffs, store, study, units
 from .errors import InputError
 from .loads import Demands
 from .sheet import blocks as sheet
@@ -99,7 +99,10 @@ class Calc:
         asked = self.connection.inputs.open_items
         unsourced = [name for name in self.given if not self.sources[name] and name not in presenting.NEEDS_NO_SOURCE]
         overridden = [name for name, source in self.sources.items() if source == cells.OVERRIDE]
-        items = [("assumption", text, basis, True) for text, basis in self.connection.assumptions()]
+        system = self.project.units
+        with units.lengths_in(system):
+            items = [("assumption", text if basis == "engineer" else units.told(text, system), basis, True)
+                     for text, basis in self.connection.assumptions()]
         items += [("open item", text, "engineer" if text in asked else "a check of this calculation", not text.endswith(presenting.FAILED))
                   for text in self.connection.open_items()]
         items += [("open item", f"Inputs without a source: {', '.join(unsourced)}.", "inputs", False)] if unsourced else []
@@ -176,8 +179,10 @@ class Calc:
 
     def drawing(self):
         """Return the connection as designed: what is to be built, elevation with the governing path, cross-section."""
+        with units.lengths_in(self.project.units):
+            drawn = self.connection.drawings()
         return Part([sheet.heading(text="Connection as designed"), presenting.designed(self.connection),
-                     *(presenting.figure(each) for each in self.connection.drawings())])
+                     *(presenting.figure(each, self.project.units, dimensioned=True) for each in drawn)])
 
     def checks(self, part):
         """Return the checks of one part of the load path, every line written out, with the tables that belong to it.
@@ -190,13 +195,18 @@ class Calc:
 
     def curve(self):
         """Return the strength of each limit state against the connection's length, and the shortest length in words."""
+        system = self.project.units
+        with units.lengths_in(system):
+            return self._curve(system)
+
+    def _curve(self, system):
         found = study.capacity_curve(self.connection)
         head = sheet.heading(text="Capacity against connection length")
         if isinstance(found, str):
-            return Part([head, sheet.prose(runs=found)])
+            return Part([head, sheet.prose(runs=units.told(found, system))])
         from .figures import capacity_curve
 
-        return Part([head, sheet.prose(runs=found.sentence), presenting.figure(capacity_curve(self.connection, found))])
+        return Part([head, sheet.prose(runs=units.told(found.sentence, system)), presenting.figure(capacity_curve(self.connection, found), system)])
 
     def permissible(self):
         """Return the largest value of each service load with the others as they are, and the plot of permissible D against L."""
@@ -205,13 +215,14 @@ class Calc:
                 runs="Not worked out: the demand is given as a required strength, not as service loads.")])
         from .figures import permissible_loads
 
-        drawn = permissible_loads(self.connection)
-        return Part([*presenting.permissible(self.connection), *([presenting.figure(drawn)] if drawn else [])])
+        with units.lengths_in(self.project.units):
+            drawn = permissible_loads(self.connection)
+        return Part([*presenting.permissible(self.connection), *([presenting.figure(drawn, self.project.units)] if drawn else [])])
 
     def closing(self):
         """Return the review, notation, references, cautions and the identification of the program."""
-        return Part([*presenting.review(self), *presenting.closing(self.connection), sheet.heading(text="Program identification"),
-                     sheet.identification(rows=identity.rows(self.connection.family))])
+        return Part([*reviewing.review(self), *presenting.closing(self.connection), sheet.heading(text="Program identification"),
+                     sheet.identification(rows=[(name, units.told(said, self.project.units)) for name, said in identity.rows(self.connection.family)])])
 
     def _repr_html_(self):
         governs = self.connection.governing

@@ -4,9 +4,10 @@ Strengths are computed once, bare, by a ``Working`` that remembers each formula 
 """
 
 import functools
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from .provisions import detailing
+from .units import told
 
 FACTORS = {
     "yielding": (0.90, 1.67),
@@ -152,6 +153,12 @@ def strength_check(id, title, part, clause, limit_state, method, nominal, demand
 def not_applicable(id, title, part, clause, reason, kind="strength"):
     """Return a check that stands in the table with the reason why it does not apply."""
     return Check(id, title, part, clause, kind=kind, reason=reason)
+
+
+def in_units(each, system):
+    """Return a check with its sentences in a system of units; its numbers stay in kip and inch."""
+    return replace(each, steps=tuple(told(step, system) if isinstance(step, str) else step for step in each.steps),
+                   notes=tuple(told(note, system) for note in each.notes), reason=told(each.reason, system))
 
 
 def worst_first(checks):

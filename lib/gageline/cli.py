@@ -191,9 +191,10 @@ def _print_summary(connection):
 
     from . import check, presenting
 
+    system = connection.basis.units_system
     table = Table("check", "clause", "required", "available", "D/C", "", box=None, pad_edge=False)
     for each in check.worst_first(connection.checks):
-        table.add_row(each.title, each.clause, presenting.required(each), presenting.available(each), presenting.ratio(each),
+        table.add_row(each.title, each.clause, presenting.required(each, system), presenting.available(each, system), presenting.ratio(each),
                       "OK" if each.ok else "see note" if each.kind == "advice" else "N.G.", style="bold" if each is connection.governing else None)
     for each in connection.checks:
         if not each.applies:

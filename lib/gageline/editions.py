@@ -58,5 +58,9 @@ REFERENCES = {
     "7-16": "ASCE/SEI 7-16, Minimum Design Loads and Associated Criteria for Buildings and Other Structures, 2016",
     "RCSC 360-22": "RCSC Specification for Structural Joints Using High-Strength Bolts, 2020",
     "RCSC 360-16": "RCSC Specification for Structural Joints Using High-Strength Bolts, 2014",
+    "AWS D1.1 360-22": "AWS D1.1/D1.1M:2020, Structural Welding Code—Steel, American Welding Society",
+    "AWS D1.1 360-16": "AWS D1.1/D1.1M:2015, Structural Welding Code—Steel, American Welding Society",
+    "Manual 360-22": "Steel Construction Manual, 16th edition, American Institute of Steel Construction, 2023",
+    "Manual 360-16": "Steel Construction Manual, 15th edition, American Institute of Steel Construction, 2017",
 }
 """Works cited in a report, by edition."""

@@ -1,6 +1,7 @@
 """The parts of a report as blocks of the sheet: tables of summary, inputs, loads and bolts, and the checks line by line."""
 
 import re
+from dataclasses import replace
 
 from . import check, units
 from .editions import REFERENCES
@@ -9,10 +10,10 @@ from .loads import Demands
 from .loads import permissible as permissible_load
 from .render import value_latex
 from .sheet import blocks as sheet
-from .signoffs import HEADINGS, ROLES
 from .symbols import SYMBOLS
 
-NEEDS_NO_SOURCE = ("mark", "title", "purpose", "assumptions", "open_items", "U_basis", "gusset_K_basis", "p_basis", "p_beam_basis", "pin_shear_basis")
+NEEDS_NO_SOURCE = ("mark", "title", "purpose", "assumptions", "open_items", "U_basis", "gusset_K_basis", "p_basis", "p_beam_basis", "pin_shear_basis",
+                   "impact_basis", "system_cap_basis", "seismic_basis")
 """Inputs that are words about the calculation, not facts about the job."""
 
 FAILED = "D/C above 1.00."
@@ -36,8 +37,18 @@ def _length(value):
     return units.printed(value, 4, 2)
 
 
-def _amount(value, unit, rounded):
-    return f"{rounded(value)} {unit}".strip()
+def _bound(value, unit, system):
+    """Return a limit or what is provided, to four figures; a length in mm keeps no zeros."""
+    if unit == "in" and system != "US":
+        mm = f"{units.printed(value * units.shown_as('in', 'SI')[1], 4)} mm"
+        return mm if system == "SI" else f"{_length(value)} in ({mm})"
+    return units.amount(value, unit, system, _length)
+
+
+def in_brackets(value, unit, system, rounded):
+    """Return LaTeX of the value in SI in brackets where a project prints both, or nothing."""
+    other, factor = units.shown_as(unit, "SI")
+    return rf"\;\left({value_latex(rounded(value * factor), other)}\right)" if system == "dual" and other != unit else ""
 
 
 def runs_of(text):
@@ -46,25 +57,30 @@ def runs_of(text):
     return [{"math": part, "alt": part.replace("_", " ")} if i % 2 else part for i, part in enumerate(parts) if part]
 
 
-def required(each):
+def required(each, system="US"):
     """Return what a check requires, never rounded down."""
-    return _amount(each.demand, each.unit, units.ceil_figures if each.kind == "strength" else _length)
+    return units.amount(each.demand, each.unit, system, units.ceil_figures) if each.kind == "strength" else _bound(each.demand, each.unit, system)
 
 
-def available(each):
+def available(each, system="US"):
     """Return what is available, never rounded up."""
-    return _amount(each.available, each.unit, units.floor_figures if each.kind == "strength" else _length)
+    return units.amount(each.available, each.unit, system, units.floor_figures) if each.kind == "strength" else _bound(each.available, each.unit, system)
 
 
-def figure(drawn):
-    """Return a drawn figure as a block."""
-    return sheet.figure(svg=drawn.svg, caption=drawn.caption, alt=drawn.alt, width=drawn.width)
+def figure(drawn, system="US", dimensioned=False):
+    """Return a drawn figure as a block; under a dimensioned one stands the unit, where the project has another than the trade's inches."""
+    said = {"US": "", "SI": " Dimensions in mm.", "dual": " Dimensions in inches."}[system] if dimensioned else ""
+    return sheet.figure(svg=drawn.svg, caption=units.told(drawn.caption, system) + said, alt=units.told(drawn.alt, system), width=drawn.width)
+
+
+UNITS = {"US": "kip, inch, ksi", "SI": "kN, mm, MPa (1 MPa = 1 N/mm²; 1 kN = 1000 N)", "dual": "kip, inch, ksi; results also in kN, mm, MPa in brackets"}
+"""Units as the cover names them."""
 
 
 def cover(calc):
     """Return the cover block of a calculation."""
     connection, job = calc.connection, calc.project
-    governs = connection.governing
+    governs, system = connection.governing, connection.basis.units_system
     applied = [each.title for each in connection.checks if each.applies and each.kind == "strength"]
     limits = sum(each.applies and each.kind != "strength" for each in connection.checks)
     applied.append(f"Spacing, edges, clearance, slenderness ({limits} limits)")
@@ -74,44 +90,67 @@ def cover(calc):
     signed = calc.signed()
     return sheet.cover(
         title=connection.inputs.title or connection.title,
-        governing=f"{governs.title} governs: required {required(governs)}, available {available(governs)}, "
+        governing=f"{governs.title} governs: required {required(governs, system)}, available {available(governs, system)}, "
                   f"D/C = {ratio(governs)}; {verdict}.",
         purpose=connection.inputs.purpose or f"{connection.title} of {connection.subject}: strength of the member's end and of its "
                                              "connection, from the gross section to the connection plate.",
         criteria=[["Specification", REFERENCES[job.edition]], ["Method", job.method], ["Loads", REFERENCES[job.loads]],
-                  ["Materials", runs_of(connection.materials_text())], ["Units", "kip, inch, ksi"]],
+                  ["Materials", runs_of(units.told(connection.materials_text(), system))],
+                  ["Units", UNITS[system]]],
         scope={"checked": applied, "not_applicable": apart, "by_others": list(connection.left_to_others())},
-        assumptions=taken, open_items=calc.open_items(), cautions=list(CAUTIONS[:3]),
+        assumptions=taken, open_items=calc.open_items(), cautions=[],
         revisions=[[job.rev, job.date.isoformat(), job.revision_text, signed["by"], signed["checked"], signed["approved"]]])
 
 
 def summary(connection):
     """Return the summary blocks."""
-    governs = connection.governing
+    governs, system = connection.governing, connection.basis.units_system
     rows = []
     ranked = check.worst_first([each for each in connection.checks if each.kind == "strength"])
     ranked.remove(governs)
     for each in (governs, *ranked):
         title = each.title + (" — governs" if each is governs else "")
-        rows.append({"cells": [title, each.clause, required(each), available(each), ratio(each), "OK" if each.ok else "N.G."],
+        rows.append({"cells": [title, each.clause, required(each, system), available(each, system), ratio(each), "OK" if each.ok else "N.G."],
                      "strong": each is governs or not each.ok})
-    for each in connection.checks:
-        if each.kind == "strength" and not each.applies:
-            rows.append({"cells": [each.title, each.clause], "span_reason": [2, f"not applicable: {each.reason}"]})
-    columns = [{"head": "Check", "width": 2.6}, {"head": "Clause", "width": 0.85}, {"head": "Required", "align": "right"}, {"head": "Available", "align": "right"},
+    columns = [{"head": "Check"}, {"head": "Clause"}, {"head": "Required", "align": "right"}, {"head": "Available", "align": "right"},
                {"head": "D/C", "align": "right"}, {"head": ""}]
     out = [sheet.heading(text="Summary"), sheet.table(columns=columns, rows=rows)]
     limits = [each for each in connection.checks if each.kind != "strength"]
     failed = [each for each in limits if each.ok is False]
-    said = "All limits of spacing, edge distance and clearance are met; they are listed in their own section." if not failed else \
-        "Not met: " + "; ".join(f"{each.title} ({required(each)} against {available(each)})" for each in failed) + "."
-    return [*out, sheet.prose(runs=said)]
+    said = f"All limits listed under “{connection.parts['detailing']}” are met." if not failed else \
+        "Not met: " + "; ".join(f"{each.title} ({_limit(each, system)}, provided {_provided(each, system)}{', a recommendation' if each.kind == 'advice' else ''})"
+                                for each in failed) + "."
+    apart = not_applicable([each for each in connection.checks if each.kind == "strength"])
+    return [*out, *apart, sheet.prose(runs=said)]
+
+
+def not_applicable(some):
+    """Return the checks that do not apply as one note with their clauses and reasons; [] if all do."""
+    by_reason = {}
+    for each in some:
+        if not each.applies:
+            by_reason.setdefault(each.reason, []).append(f"{each.title} ({each.clause})")
+    said = "; ".join(f"{', '.join(titles)}: {reason}" for reason, titles in by_reason.items())
+    return [sheet.note(runs=f"Not applicable: {said}.")] if said else []
+
+
+def _bare(value, unit, system):
+    """Return a limit's number: two decimals for a length, none added to a number without unit."""
+    return _bound(value, unit, system) if unit else units.printed(value)
+
+
+def _limit(each, system):
+    return f"{'≤' if each.at_most else '≥'} {_bare(each.nominal, each.unit, system)}".replace(" ", "\u00a0")
+
+
+def _provided(each, system):
+    return _bare(each.demand if each.at_most else each.available, each.unit, system).replace(" ", "\u00a0")
 
 
 def inputs(calc):
     """Return the inputs as executed: given ones with their source, defaults marked so."""
-    rows, defaults, group = [], [], None
-    for heading, name, meaning, value, given in calc.connection.inputs.shown():
+    rows, defaults, group, system = [], [], None, calc.connection.basis.units_system
+    for heading, name, meaning, value, given in calc.connection.inputs.shown(system):
         if not given:
             defaults += [f"{name} = {value}"] if value not in ("not given", "none", "") else []
             continue
@@ -121,10 +160,11 @@ def inputs(calc):
             rows.append({"cells": [], "span_reason": [0, [{"strong": heading}]]})
             group = heading
         typed = calc.given[name].value
-        if isinstance(typed, str) and re.search(r"(mm|cm|kN|MPa|psi|lbf| m)$", typed.strip()):
+        foreign = {"US": r"(mm|cm|kN|MPa|psi|lbf| m)$", "SI": r"(in|ft|[\"']|kip|kips|ksi|psi|lbf|cm| m)$", "dual": r"(cm|psi|lbf| m)$"}[system]
+        if isinstance(typed, str) and typed != value and re.search(foreign, typed.strip()):
             value = f"{typed} = {value}"
         rows.append({"cells": [name, meaning, value, calc.sources[name] or "no source given"]})
-    columns = [{"head": "Input", "width": 1.35}, {"head": "Meaning", "width": 2.1}, {"head": "Value", "width": 1.45}, {"head": "Source"}]
+    columns = [{"head": "Input"}, {"head": "Meaning"}, {"head": "Value"}, {"head": "Source"}]
     out = [sheet.heading(text="Inputs"), sheet.table(columns=columns, rows=rows)]
     return [*out, sheet.note(runs=f"Inputs left at their default: {'; '.join(defaults)}.")] if defaults else out
 
@@ -138,75 +178,119 @@ def _combination(text):
 
 def loads(connection):
     """Return the loads: all combinations with numbers, or the given demand."""
-    demand, basis = connection.demand, connection.basis
+    demand, basis, system = connection.demand, connection.basis, connection.basis.units_system
+    unit, factor = units.shown_as("kip", system)
     sign = "P_u" if basis.method == "LRFD" else "P_a"
-    out = [sheet.heading(text="Loads and required strength")]
-    if isinstance(demand, Demands):
+    service, (impact, expected) = getattr(demand, "service", demand), connection.load_steps()
+    out = [sheet.heading(text="Loads and required strength"), *steps(impact, basis.edition, system)]
+    if isinstance(service, Demands):
         rows = []
-        for row in demand.rows:
-            governs = row is demand.tension or row is demand.compression
-            numbers = " ".join(f"{'−' if value < 0 else '+' if i else ''} {units.printed(abs(value))}".strip()
+        for row in service.rows:
+            governs = row is service.tension or row is service.compression
+            numbers = " ".join(f"{'−' if value < 0 else '+' if i else ''} {units.printed(abs(value) * factor)}".strip()
                                for i, value in enumerate(row.terms.values()))
-            total = units.printed(row.total)
+            total = units.printed(row.total * factor)
             rows.append({"cells": [row.combination.clause, _combination(row.combination.text), numbers, total.replace("-", "−")], "strong": governs})
-        columns = [{"head": "Clause"}, {"head": "Combination"}, {"head": "With numbers, kip"}, {"head": "Total, kip", "align": "right"}]
+        said = " ".join(row.combination.text for row in service.rows)
+        columns = [{"head": "Clause"}, {"head": "Combination"}, {"head": f"With numbers, {unit}"}, {"head": f"Total, {unit}", "align": "right"}]
         out.append(sheet.table(columns=columns, rows=rows, caption=f"Combinations of {basis.loads_standard}, {basis.method}; tension positive, "
-                                                                   "the governing ones in bold; W′: wind in the opposite sense."))
+                                                                   "the governing ones in bold" + ("; W′: wind in the opposite sense." if "W_opp" in said else ".")))
     else:
         out.append(sheet.prose(runs=f"The required strength is given at {demand.level} level."))
+    out += steps(expected, basis.edition, system)
     out.append(sheet.prose(runs=[
-        "Required tension ", {"math": f"{sign} = {value_latex(units.ceil_figures(demand.required_tension, 4), 'kip')}", "alt": "required tension"},
-        *([f"; required compression {units.ceil_figures(demand.required_compression, 4)} kip"] if demand.required_compression > 0 else
+        "Required tension ", {"math": f"{sign} = {value_latex(units.ceil_figures(demand.required_tension * factor, 4), unit)}"
+                                        + in_brackets(demand.required_tension, "kip", system, lambda value: units.ceil_figures(value, 4)), "alt": "required tension"},
+        *([f"; required compression {units.amount(demand.required_compression, 'kip', system, lambda value: units.ceil_figures(value, 4))}"] if demand.required_compression > 0 else
           ["; no combination gives compression" if isinstance(demand, Demands) else "; no compression is given"]), "."]))
     return out
 
 
 def designed(connection):
     """Return what is to be built, for comparison with the drawings."""
-    return sheet.pairs(rows=[[key, value, ""] for key, value in connection.designed()])
+    system = connection.basis.units_system
+    with units.lengths_in(system):
+        return sheet.pairs(rows=[[key, units.told(value, system), ""] for key, value in connection.designed()])
 
 
-def steps(done, edition):
-    """Return remembered steps as blocks: remarks as prose, each formula call as an equation with its clause."""
-    out = []
-    for step in done:
+LEAST_REPEATED = 2
+"""So many lines in a row that stand in a check before are not written out again; their results are."""
+
+
+def steps(done, edition, system="US", worked=None, title=""):
+    """Return remembered steps as blocks: remarks as prose, each formula call as an equation with its clause.
+
+    Parameters
+    ----------
+    done : the steps of a check. edition : of the specification. system : of units.
+    worked : calls written out before in the same part -> title of their check, added to; None to write out every line.
+    title : of this check.
+    """
+    out, worked, k = [], {} if worked is None else worked, 0
+    before = dict(worked)
+    while k < len(done):
+        step, repeated = done[k], []
+        while k + len(repeated) < len(done) and (source := before.get(_call(done[k + len(repeated)]))) and source == before.get(_call(step)):
+            repeated.append(done[k + len(repeated)])
+        if len(repeated) >= LEAST_REPEATED:
+            out.append(_as_before(before[_call(step)], repeated, edition, system))
+            k += len(repeated)
+            continue
+        k += 1
         if isinstance(step, str):
             out.append(sheet.prose(runs=runs_of(step)))
             continue
+        worked.setdefault(_call(step), title)
         formula, values = step
-        lines = [line.rendered() for line in formula.lines(*values, edition=edition)]
+        lines = [line.rendered(system) for line in formula.lines(*values, edition=edition)]
         out.append(sheet.equation(lines=[{"lhs": line.sign, "rows": [row for row in (line.symbolic, line.numeric, line.result) if row]}
                                          for line in lines],
                                   alt=" ".join(line.reading for line in lines), clause=formula.clause[edition]))
     return out
 
 
+def _call(step):
+    """Return what tells a formula call from others: the formula and its values; None for a remark."""
+    return None if isinstance(step, str) else (id(step[0]), *map(repr, step[1]))
+
+
+def _as_before(title, repeated, edition, system):
+    """Return the results of lines written out in a check before, as one remark that names it."""
+    runs = [f"As under “{title}”: "]
+    for i, (formula, values) in enumerate(repeated):
+        line = formula.lines(*values, edition=edition)[-1].rendered(system)
+        runs += [", "] if i else []
+        runs.append({"math": f"{line.sign} = {line.result}", "alt": line.reading})
+    return sheet.prose(runs=[*runs, "."])
+
+
 def checks(connection, part):
     """Return the checks of one part, every line written out; detailing as one table."""
     if part == "detailing":
         return _detailing(connection)
+    system = connection.basis.units_system
     out = [sheet.heading(text=connection.parts[part])]
-    apart = []
-    for each in connection.checks:
-        if each.part != part or each.kind != "strength":
-            continue
+    shown = [each for each in connection.checks if each.part == part and each.kind == "strength"]
+    worked = {}
+    for each in shown:
         if not each.applies:
-            apart.append([each.title, each.reason, each.clause])
             continue
         out.append(sheet.heading(text=_within(each), level=2))
-        out += steps(each.steps, connection.basis.edition)
+        out += steps(each.steps, connection.basis.edition, system, worked, _within(each))
         sign = r"\phi " if connection.basis.method == "LRFD" else ""
         nominal = "P_n" if each.axial else "R_n"
         strength = f"{sign}{nominal}" if sign else rf"{nominal}/\Omega"
-        lhs = [{"math": f"{strength} = {value_latex(units.floor_figures(each.available), 'kip')}", "alt": f"available strength {available(each)}"}]
-        out.append(sheet.verdict(lhs=lhs, text=f"{units.ceil_figures(each.demand)} / {units.floor_figures(each.available)}",
+        if each.unit != "kip":
+            strength = SYMBOLS[each.steps[-1][0].result].latex
+        unit, factor = units.shown_as(each.unit, system)
+        lhs = [{"math": f"{strength} = {value_latex(units.floor_figures(each.available * factor), unit)}"
+                        + in_brackets(each.available, each.unit, system, units.floor_figures), "alt": f"available strength {available(each, system)}"}]
+        out.append(sheet.verdict(lhs=lhs, text=f"{units.ceil_figures(each.demand * factor)} / {units.floor_figures(each.available * factor)}",
                                  ratio_text=ratio(each), ok=each.ok))
         out += [sheet.note(runs=remark) for remark in each.notes]
     for made in connection.tables(part):
-        out += _table(made)
-    if apart:
-        out += [sheet.heading(text="Not applicable", level=2), sheet.pairs(rows=apart)]
-    return out
+        out += _table(made, system)
+    return [*out, *not_applicable(shown)]
 
 
 def _within(each):
@@ -216,7 +300,7 @@ def _within(each):
 
 
 def _detailing(connection):
-    rows = []
+    rows, system = [], connection.basis.units_system
     for each in connection.checks:
         if each.kind == "strength":
             continue
@@ -227,23 +311,48 @@ def _detailing(connection):
         shown = ""
         if limit:
             formula, values = limit[-1]
-            line = formula.lines(*values)[-1].rendered()
+            line = formula.lines(*values)[-1].rendered(system)
             shown = [{"math": f"{line.sign} = {line.symbolic} = {line.result}" if line.symbolic else f"{line.sign} = {line.result}",
                       "alt": line.reading}]
         verdict = "OK" if each.ok else ("see note" if each.kind == "advice" else "N.G.")
-        provided = each.demand if each.at_most else each.available
-        bound = f"{'≤' if each.at_most else '≥'} {_amount(each.nominal, each.unit, _length)}"
-        rows.append({"cells": [each.title, each.clause, shown, bound, _amount(provided, each.unit, _length), ratio(each), verdict],
+        rows.append({"cells": [each.title, each.clause, shown, _limit(each, system), _provided(each, system), ratio(each), verdict],
                      "strong": not each.ok})
-    columns = [{"head": "Check", "width": 1.6}, {"head": "Clause", "width": 0.75}, {"head": "Limit", "width": 2.0}, {"head": "Required", "align": "right"},
+    columns = [{"head": "Check"}, {"head": "Clause"}, {"head": "Limit"}, {"head": "Required", "align": "right"},
                {"head": "Provided", "align": "right"}, {"head": "D/C", "align": "right"}, {"head": ""}]
     remarks = dict.fromkeys(remark for each in connection.checks if each.kind != "strength" for remark in each.notes)
     return [sheet.heading(text=connection.parts["detailing"]), sheet.table(columns=columns, rows=rows),
             *(sheet.note(runs=remark) for remark in remarks)]
 
 
-def _table(made):
+def _in_si(made):
+    """Return a family's table in SI: columns by the unit in their head, or in words below the table where the head names none."""
+    if "unit" not in made.caption and not any(re.search(r", (in|in²|kip|kip·in)$", head) for head in made.heads) and "in kip" not in made.caption:
+        return replace(made, rows=tuple(tuple(units.told(cell, "SI") for cell in row) for row in made.rows), remark=units.told(made.remark, "SI"))
+    named = [re.search(r", (in|in²|kip|kip·in)$", head) for head in made.heads]
+    forces = "kip" if "in kip" in made.caption else ""
+    column = [found[1] if found else forces if i and not re.search(r"l_w/w_f|share|alpha|lines", head) else ""
+              for i, (head, found) in enumerate(zip(made.heads, named))]
+    heads = tuple(head[:found.start()] + f", {units.shown_as(found[1], 'SI')[0]}" if found else head for head, found in zip(made.heads, named))
+    rows = tuple(tuple(_cell(cell, unit) for cell, unit in zip(row, column)) for row in made.rows)
+    caption = units.told(made.caption.replace("in kip", "in kN"), "SI")
+    return replace(made, heads=heads, rows=rows, caption=caption, remark=units.told(made.remark, "SI"))
+
+
+def _cell(cell, unit):
+    """Return a cell of a table in SI: its leading number times the unit's factor."""
+    found = re.match(r"[−-]?[\d.,/¼½¾⅛⅜⅝⅞-]*\d?[\d¼½¾⅛⅜⅝⅞]", cell)
+    if not unit or not found:
+        return units.told(cell, "SI")
+    number = units.read(f"{found[0].replace('−', '-')} {unit.replace('²', '**2').replace('·', '*')}", unit)
+    if unit == "in":
+        return units.millimetres(number) + cell[found.end():]
+    return units.printed(number * units.shown_as(unit, "SI")[1]) + cell[found.end():]
+
+
+def _table(made, system="US"):
     """Return a family's own table as blocks."""
+    if system == "SI":
+        made = _in_si(made)
     columns = [{"head": runs_of(head), "align": "right" if i else "left"} for i, head in enumerate(made.heads)]
     rows = [{"cells": [runs_of(cell) for cell in row]} for row in made.rows]
     out = [sheet.heading(text=made.title, level=2), sheet.table(columns=columns, rows=rows, caption=runs_of(made.caption))]
@@ -253,67 +362,46 @@ def _table(made):
 def permissible(connection):
     """Return the table of the largest value of each service load with the others fixed."""
     inputs, basis = connection.inputs, connection.basis
-    service, capacity = inputs.service(), connection.capacity
+    service, capacity, system = inputs.service(), connection.capacity, basis.units_system
     rows = []
     for nature, value in service.items():
         if value < 0:
             continue
         found = permissible_load(capacity, service, nature, basis.method, basis.loads, **inputs.load_options())
         limit = _combination(found.combination.text) if found.combination else ""
-        largest = f"{units.floor_figures(found.value)} kip" if found.value is not None else "none"
-        rows.append({"cells": [nature, f"{units.printed(value)} kip", largest, limit if found.value is not None else found.reason]})
+        largest = units.amount(found.value, "kip", system, units.floor_figures) if found.value is not None else "none"
+        rows.append({"cells": [nature, units.amount(value, "kip", system, units.printed), largest,
+                               limit if found.value is not None else units.told(found.reason, system)]})
     columns = [{"head": "Load"}, {"head": "As given", "align": "right"}, {"head": "Permissible", "align": "right"}, {"head": "Limited by"}]
     return [sheet.heading(text="Permissible loads"),
-            sheet.prose(runs=f"The connection permits a required tension of {units.floor_figures(capacity)} kip ({basis.method}). "
+            sheet.prose(runs=f"The connection permits a required tension of {units.amount(capacity, 'kip', system, units.floor_figures)} ({basis.method}). "
                              "Largest value of each load with the others as given:"),
             sheet.table(columns=columns, rows=rows)]
-
-
-def review(calc):
-    """Return the record of review: sign-offs, the checker's list, comments with responses, the register of open items; [] if there is none."""
-    log, out = calc.log, []
-    register = [row for row in calc.register() if row["kind"] == "open item"]
-    if not log.events and not register:
-        return []
-    out.append(sheet.heading(text="Sign-offs, review and open items"))
-    held = [log.sign_off(role, calc.content) for role in ROLES]
-    rows = [{"cells": [role, each["who"], each["when"][:10], each["method"] or "–"]} if each else {"cells": [role], "span_reason": [1, "not signed"]}
-            for role, each in zip(ROLES, held)]
-    out.append(sheet.table(columns=[{"head": "Role"}, {"head": "Name"}, {"head": "Date"}, {"head": "Method of check"}], rows=rows))
-    if checker := held[ROLES.index("checker")]:
-        out += [sheet.heading(text="Checker's list", level=2),
-                sheet.pairs(rows=[[name.capitalize(), checker["findings"][name], ""] for name in HEADINGS])]
-    if comments := log.comments():
-        rows = []
-        for each in comments:
-            answers = "; ".join(f"{one['text']} ({one['who']}, {one['when'][:10]})" for one in each["answers"]) or "none yet"
-            closed = f"closed {each['closed']['when'][:10]} by {each['closed']['who']}" if each["closed"] else "open"
-            rows.append({"cells": [each["id"], f"{each['on']} ({each['who']}, {each['when'][:10]}): {each['text']}", answers, closed],
-                         "strong": not each["closed"]})
-        columns = [{"head": "No."}, {"head": "Comment", "width": 2.6}, {"head": "Response", "width": 2.2}, {"head": "Status"}]
-        out += [sheet.heading(text="Review comments", level=2), sheet.table(columns=columns, rows=rows)]
-    if register:
-        rows = [{"cells": [row["id"], row["text"], row["basis"], row["status"]], "strong": row["open"]} for row in register]
-        columns = [{"head": "No."}, {"head": "Item", "width": 2.9}, {"head": "Raised by", "width": 1.2}, {"head": "Status"}]
-        out += [sheet.heading(text="Register of open items", level=2), sheet.table(columns=columns, rows=rows)]
-    return out
 
 
 def used_symbols(connection):
     """Return the symbols that the report's lines use, in the table's order."""
     used = set()
-    for each in connection.checks:
-        for step in each.steps:
+    for done in (*connection.load_steps(), *(each.steps for each in connection.checks)):
+        for step in done:
             if isinstance(step, tuple) and isinstance(step[0], Formula):
                 used |= set(step[0].arguments) | {line.symbol for line in step[0].body}
     return [symbol for name, symbol in SYMBOLS.items() if name in used]
 
 
+def _works(connection):
+    """Return the works beside specification and loads that a calculation goes by: for bolts, for welds, for what the Manual alone gives."""
+    built = " ".join(word for row in connection.designed() for word in row).lower()
+    clauses = " ".join(each.clause for each in connection.checks if each.applies)
+    asked = {"RCSC": re.search(r"\bbolts?\b", built), "AWS D1.1": re.search(r"weld|fillet", built), "Manual": "Manual" in clauses}
+    return [name for name, needed in asked.items() if needed]
+
+
 def closing(connection):
     """Return notation, references and cautions."""
     basis = connection.basis
-    rows = [{"latex": symbol.latex, "alt": symbol.spoken, "meaning": symbol.meaning, "unit": symbol.unit or "–"} for symbol in used_symbols(connection)]
+    rows = [{"latex": symbol.latex, "alt": symbol.spoken, "meaning": symbol.meaning, "unit": units.shown_as(symbol.unit, basis.units_system)[0] or "–"} for symbol in used_symbols(connection)]
     works = [[basis.specification, REFERENCES[basis.edition]], [basis.loads_standard, REFERENCES[basis.loads]],
-             ["RCSC", REFERENCES[f"RCSC {basis.edition}"]]]
+             *([name, REFERENCES[f"{name} {basis.edition}"]] for name in _works(connection))]
     return [sheet.heading(text="Notation"), sheet.notation(rows=rows), sheet.heading(text="References"), sheet.references(rows=works),
             sheet.heading(text="Cautions"), sheet.cautions(rows=list(CAUTIONS))]

@@ -82,7 +82,7 @@ def _tidy(body):
     body = body.strip().lstrip("=").strip().replace(chr(_SLOT + 97), r"\pi")
     body = re.sub(r"\\operatorname\{(min|max)\}", r"\\\1", body).replace(r",\ ", ",")
     body = re.sub(rf"\\left\( (\\pi|[\d.]+|{slot}) \\right\) \^\{{", r"\1^{", body)
-    body = re.sub(r"\^\{ \\left\( (\\frac\{[^{}]*\}\{[^{}]*\}) \\right\) \}", r"^{\1}", body)
+    body = re.sub(r"\^\{ \\left\( \\frac\{([^{}]*)\}\{([^{}]*)\} \\right\) \}", r"^{\1/\2}", body)  # a fraction in an exponent is too small to read
     body = re.sub(r"\^\{ \\left\( - (\d+) \\right\) \}", r"^{-\1}", body)
     return re.sub(r"\s+", " ", body)
 

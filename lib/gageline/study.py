@@ -95,6 +95,8 @@ def over_pitch(connection, pitches):
 
 def capacity_curve(connection):
     """Return the ``Curve`` of a connection, or a sentence why there is none."""
+    if connection.inputs.seismic_system is not None:
+        return "Not drawn: the demand follows the brace's own expected strength, against which its yielding is not checked."
     sweep = connection.sweep()
     if isinstance(sweep, str):
         return sweep

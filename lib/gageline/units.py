@@ -197,7 +197,8 @@ def millimetres(value):
 _ONE = r"(?:\d+-\d+/\d+|\d+/\d+|\d*[¼½¾⅛⅜⅝⅞]|\d+(?: \d{3})*(?:\.\d+)?)"
 _TOLD = re.compile(rf"(?<![\w.,/’'-])(?P<numbers>{_ONE}(?:(?: x | × | to | and | by |–){_ONE})*)"
                    r"(?P<gap>[ -])(?P<unit>kip/in|kip·in|kip inches|kips?|ksi|in[²³]|inches|in\.(?= [a-z(])|in)(?![\w²³/·^])"
-                   r"(?! (?:the|line|lines|series|tension|shear|bearing|a row)\b)")  # "2 in line" is no length
+                   r"(?! (?:the|line|lines|series|tension|shear|bearing|a row)\b)(?! \(\d)(?P<also> \(−\d[\d.]*\))?")
+# "2 in line" is no length; what has a number in brackets behind it stands in both systems already.
 _TOLD_UNIT = {"kips": "kip", "inches": "in", "in.": "in", "kip inches": "kip·in"}
 
 
@@ -222,7 +223,9 @@ def told(text, system):
             return millimetres(value) if unit == "in" else printed(value * factor, max(4, len(plain.replace(".", "").lstrip("0"))))
 
         said = f"{re.sub(_ONE, number, match['numbers'])}{match['gap']}{si}"
-        return said if system == "SI" else f"{match[0]} ({said.replace('-', ' ')})"
+        if system == "dual":
+            return f"{match[0]} ({said.replace('-', ' ')})"
+        return said + re.sub(_ONE, number, match["also"] or "")
 
     return _TOLD.sub(one, text)
 

@@ -15,15 +15,31 @@ source = "Evaluated by hand: 50 ksi on 10 sq. in."
 edition = "360-22"
 evidence = "derived"
 work = "P_y = tension.gross_yielding(50, 10)"
-results = [{is = "P_y", state = "yielding", printed = "500", lrfd = "450", asd = "%s"}, {is = "P_y", printed = "502", tolerance_percent = 0.5, why = "read off a graph"}]
+results = [{is = "P_y", state = "yielding", printed = "500", lrfd = "450", asd = "%s"},
+  {is = "P_y", printed = "502", tolerance_percent = 0.5, why = "read off a graph"}]
 
 [[example]]
 id = "T-2"
 source = "Evaluated by hand: required strength of a given demand"
 edition = "360-22"
 evidence = "found"
-connection = {member = "PL 1/2 x 6", member_grade = "A572-50", plate_thickness = "1/2 in", plate_width = "6 in", plate_grade = "A572-50", plate_end = "1-1/2 in", lines = 2, rows = 3, pitch = "3 in", gage = "3 in", member_end = "1-1/2 in", bolt = "7/8", bolt_grade = "A325", tension = "90 kip"}
-results = [{demand = true, lrfd = "90"}, {check = "member yielding", lrfd = "135", asd = "89.8"}, {check = "member rupture", step = "net_area_straight", printed = "2.00"}]
+results = [{demand = true, lrfd = "90"}, {check = "member yielding", lrfd = "135", asd = "89.8"},
+  {check = "member rupture", step = "net_area_straight", printed = "2.00"}]
+[example.connection]
+member = "PL 1/2 x 6"
+member_grade = "A572-50"
+plate_thickness = "1/2 in"
+plate_width = "6 in"
+plate_grade = "A572-50"
+plate_end = "1-1/2 in"
+lines = 2
+rows = 3
+pitch = "3 in"
+gage = "3 in"
+member_end = "1-1/2 in"
+bolt = "7/8"
+bolt_grade = "A325"
+tension = "90 kip"
 '''
 
 

@@ -22,7 +22,7 @@ LEVEL = {
     "connections": 6,
     "study": 7, "families": 7,
     "figures": 8, "sheet": 8, "cells": 8, "project": 8, "search": 8,
-    "identity": 9, "view": 9, "presenting": 9,
+    "identity": 9, "view": 9, "presenting": 9, "reviewing": 9,
     "calc": 10,
     "running": 11,
     "starting": 12, "archive": 12, "schedule": 12, "terminal": 12,

@@ -4,7 +4,7 @@ from dataclasses import dataclass
 from functools import cached_property
 from typing import Literal
 
-from .. import check, loads
+from .. import check, loads, units
 from ..editions import Basis
 from ..errors import InputError, ScopeError
 from . import fatigue, impact, seismic
@@ -94,6 +94,14 @@ SERVICE = {"D": "P_D", "L": "P_L", "Lr": "P_Lr", "S": "P_S", "R": "P_R", "W": "P
 """Nature of a load -> the input that holds it."""
 
 
+METRIC_CONSTANTS = (
+    "The Specification's metric constants are used for the allowance for damage at holes (2 mm), long joints (950 mm), fillers (6 mm, 0.0154 per mm), "
+    "upper limits of spacing and edge distance (300, 180 and 150 mm) and the effective width beside a pin hole (16 mm). Strengths of steels, bolts "
+    "and filler metals, E, least sizes and edge margins of fillet welds, clearances of pins and other limits of length are those of the inch "
+    "tables, converted exactly; the rounded metric twins may differ from them by up to one unit of their last digit.")
+"""What is metric and what is converted where a project is in SI; printed as an assumption."""
+
+
 @dataclass(frozen=True)
 class Table:
     """A table of a family's own: heads and rows of text, a caption, a remark below; numbers right of the first column."""
@@ -166,8 +174,17 @@ class Connection:
     @cached_property
     def checks(self):
         """Every limit state on the load path in order, those that do not apply with their reason."""
-        made = seismic.adjusted(self, tuple(self._checks()))
-        return (*made, *fatigue.checks(self, made), *seismic.checks(self, made))
+        system = self.basis.units_system
+        with units.lengths_in(system):
+            made = seismic.adjusted(self, tuple(self._checks()))
+            made = (*made, *fatigue.checks(self, made), *seismic.checks(self, made))
+        return made if system == "US" else tuple(check.in_units(each, system) for each in made)
+
+    def load_steps(self):
+        """Return (steps before the combinations, steps after them): impact on the live load, expected strength of a seismic brace."""
+        do = check.Working()
+        impact.live_load(self.inputs, do)
+        return tuple(do.steps), getattr(self.demand, "steps", ())
 
     def service_tension(self):
         """Return (tension at service load, in words where from). [kip]"""
@@ -196,13 +213,15 @@ class Connection:
         demand = {"tension": self.demand.required_tension, "compression": self.demand.required_compression}
         return {"family": self.family, "mark": self.inputs.mark, "edition": self.basis.edition, "method": self.basis.method,
                 "loads": self.basis.loads, "demand": demand, "checks": [each.to_dict() for each in self.checks],
-                "governing": self.governing.id, "ratio": self.governing.ratio, "ok": self.ok, "capacity": self.capacity}
+                "governing": self.governing.id, "ratio": self.governing.ratio, "ok": self.ok, "capacity": self.capacity,
+                **({} if self.basis.units_system == "US" else {"units": self.basis.units_system})}
 
     def assumptions(self):
         """Return (text, basis) of what the calculation takes for granted, the engineer's own first."""
         i, basis = impact.fraction(self.inputs)
         moving = [(f"The moving part of the live load is raised by {100 * i:.3g} % for impact.", basis)] if i else []
-        return [*((text, "engineer") for text in self.inputs.assumptions), *moving, *seismic.notes(self)]
+        metric = [(METRIC_CONSTANTS, "project.toml")] if self.basis.units_system == "SI" else []
+        return [*((text, "engineer") for text in self.inputs.assumptions), *moving, *seismic.notes(self), *metric]
 
     def open_items(self):
         """Return what has to be confirmed or decided before the calculation may be relied on."""

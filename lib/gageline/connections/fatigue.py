@@ -85,7 +85,7 @@ def _range(given, detail, do, A_SR, by_id):
     else:
         F_SR = do(fatigue.allowable_range, facts.F_1000, category.C_f, n, category.F_TH)
     notes = (detail.note,) if detail.note else ()
-    return Check(f"{ID} {detail.id}", f"{TITLE}, {detail.title}", detail.part, f"{CLAUSE}, category {category.name}", nominal=F_SR, available=F_SR,
+    return Check(f"{ID} {detail.id}", f"{TITLE}, {detail.title[0].lower()}{detail.title[1:]}", detail.part, f"{CLAUSE}, category {category.name}", nominal=F_SR, available=F_SR,
                  demand=f_SR, unit="ksi", steps=tuple(do.steps), notes=notes, tension=False)
 
 
@@ -95,7 +95,7 @@ def _peak(c, detail, A_SR):
     P_max = P_max if detail.force is None else detail.force(do, P_max)
     f_max = do(fatigue.peak_stress, P_max, A_SR)
     F_max = do(fatigue.peak_limit, detail.F_y)
-    return Check(f"{ID} {detail.id} peak", f"{TITLE}, largest stress, {detail.title}", detail.part, "Appendix 3.1", nominal=F_max, available=F_max,
+    return Check(f"{ID} {detail.id} peak", f"{TITLE}, largest stress, {detail.title[0].lower()}{detail.title[1:]}", detail.part, "Appendix 3.1", nominal=F_max, available=F_max,
                  demand=f_max, unit="ksi", steps=tuple(do.steps), tension=False)
 
 
@@ -132,9 +132,9 @@ def at_bolts(part, title, yielding, rupture, installation, F_y, force=None, note
     force : see ``Detail``. note : a remark below the check.
     """
     if installation == "slip-critical":
-        return Detail(f"{part} {title}".lower(), f"{title}, gross section at the bolts", part, "B", "Table A-3.1, 2.1", (yielding, "A_g"), force,
+        return Detail(part, f"{title}, gross section at the bolts", part, "B", "Table A-3.1, 2.1", (yielding, "A_g"), force,
                       F_y, note=note)
-    return Detail(f"{part} {title}".lower(), f"{title}, net section at the bolts", part, "B", "Table A-3.1, 2.2", (rupture, "A_n"), force, F_y,
+    return Detail(part, f"{title}, net section at the bolts", part, "B", "Table A-3.1, 2.2", (rupture, "A_n"), force, F_y,
                   note=note)
 
 

@@ -88,17 +88,22 @@ class Inputs(BaseModel):
         except ValidationError as error:
             raise InputError(_sentence(cls, error.errors()[0])) from None
 
-    def shown(self):
-        """Return (group, name, meaning, value as text, whether given) for every input, in order of definition."""
-        return [(field.json_schema_extra["group"], name, field.description, display(getattr(self, name), field), name in self.model_fields_set)
+    def shown(self, system="US"):
+        """Return (group, name, meaning, value as text in a system of units, whether given) for every input, in order of definition."""
+        return [(field.json_schema_extra["group"], name, field.description, display(getattr(self, name), field, system), name in self.model_fields_set)
                 for name, field in type(self).model_fields.items()]
 
 
-def display(value, field):
+def display(value, field, system="US"):
     """Return an input's value as printed in the inputs table."""
     unit = _unit(field)
     if value is None:
         return "not given"
+    if system == "dual" and unit in ("in", "kip") and value != ():
+        return f"{display(value, field)} ({display(value, field, 'SI')})"
+    if system == "SI" and unit == "in":
+        points = value if isinstance(value, tuple) else (value,)
+        return "; ".join(", ".join(units.printed(v * 25.4) for v in (p if isinstance(p, tuple) else (p,))) for p in points) + " mm" if points else "none"
     if unit == "rad":
         return f"{value * 57.29577951308232:.4g}°"
     if unit == "in":
@@ -107,7 +112,7 @@ def display(value, field):
                 if value else "none"
         return units.fraction(value) + " in" + (f" ({units.feet(value)})" if value >= 24 else "")
     if unit is not None:
-        return f"{units.printed(value)} {unit}".strip()
+        return units.amount(value, unit, system, units.printed)
     if isinstance(value, bool):
         return "yes" if value else "no"
     if isinstance(value, tuple):

@@ -1,9 +1,11 @@
 """Diagrams: strength against connection length, and the loads that the connection still permits."""
 
+from dataclasses import replace
+
 import numpy as np
 
 from ..loads import permissible_region
-from ..units import ceil_figures, floor_figures, fraction
+from ..units import ceil_figures, floor_figures, fraction, shown_as
 from . import style
 
 LABELS = {
@@ -32,6 +34,7 @@ def capacity_canvas(connection, curve):
     ----------
     connection : a bolted connection. curve : its study.Curve.
     """
+    curve, (kip, _) = _in_units(curve, connection), shown_as("kip", connection.basis.units_system)
     figure = style.canvas(*SIZE)
     axes = figure.add_axes((LEFT / SIZE[0], BOTTOM / SIZE[1], (SIZE[0] - LEFT - RIGHT) / SIZE[0], (SIZE[1] - BOTTOM - TOP) / SIZE[1]))
     demands, rest = _demands(curve)
@@ -54,11 +57,24 @@ def capacity_canvas(connection, curve):
         governs = value == demands[0][1]
         look = {"color": style.ACCENT, "lw": 1.4 if governs else 0.8}
         axes.plot([x_low, x_high], [value, value], zorder=4.5, gid="demand", **look)
-        ends.append((value, f"{_loads(text)} = {ceil_figures(value)} kip", style.ACCENT, look))
+        ends.append((value, f"{_loads(text)} = {ceil_figures(value)} {kip}", style.ACCENT, look))
     _labels(axes, ends, x_low, x_high, y_high)
-    _not_drawn(axes, rest, x_low, x_high, y_high)
+    _not_drawn(axes, rest, x_low, x_high, y_high, kip)
     _design(axes, connection, curve, demands, (x_low, x_high, y_high))
     return figure
+
+
+def _in_units(curve, connection):
+    """Return the curve with its lengths and forces as the project prints them."""
+    system = connection.basis.units_system
+    (inch, by), (_, times) = shown_as("in", system), shown_as("kip", system)
+    if system != "SI":
+        return curve
+    label = f"{curve.sweep.label.removesuffix(', in')}, {inch}"
+    return replace(curve, lengths=curve.lengths * by, strengths={id: values * times for id, values in curve.strengths.items()},
+                   stretched_lengths=curve.stretched_lengths * by,
+                   stretched={id: values * times for id, values in curve.stretched.items()},
+                   demands=tuple((text, value * times) for text, value in curve.demands), sweep=replace(curve.sweep, label=label))
 
 
 def _loads(text):
@@ -81,13 +97,13 @@ def _demands(curve):
     return shown, rest
 
 
-def _not_drawn(axes, rest, x_low, x_high, y_high):
+def _not_drawn(axes, rest, x_low, x_high, y_high, kip):
     if not rest:
         return
     across, up = (x_high - x_low) / ((SIZE[0] - LEFT - RIGHT) * 72), y_high / ((SIZE[1] - BOTTOM - TOP) * 72)
-    lines = (f"{len(rest)} further combination{'s' if len(rest) > 1 else ''},", f"at most {ceil_figures(max(rest))} kip, not drawn")
+    lines = (f"{len(rest)} further combination{'s' if len(rest) > 1 else ''},", f"at most {ceil_figures(max(rest))} {kip}, not drawn")
     for k, line in enumerate(lines):
-        axes.text(x_high + 15 * across, (-20 - 9 * k) * up, line, fontsize=style.TINY, va="baseline", color=style.SOFT, clip_on=False)
+        axes.text(x_high + 15 * across, (-25 - 8.5 * k) * up, line, fontsize=style.TINY, va="baseline", color=style.SOFT, clip_on=False)
 
 
 def _limits(curve, demands):
@@ -106,7 +122,7 @@ def _frame(axes, connection, curve):
 
     sign = "ϕRₙ" if connection.basis.method == "LRFD" else "Rₙ/Ω"
     axes.set_xlabel(curve.sweep.label, fontsize=style.TYPE, labelpad=3)
-    axes.set_ylabel(f"available strength {sign}, kip", fontsize=style.TYPE, labelpad=4)
+    axes.set_ylabel(f"available strength {sign}, {shown_as('kip', connection.basis.units_system)[0]}", fontsize=style.TYPE, labelpad=4)
     axes.yaxis.set_major_locator(MaxNLocator(6, steps=[1, 2, 2.5, 5, 10]))
     axes.xaxis.set_major_locator(MaxNLocator(9, steps=[1, 2, 3, 6, 10]))
     axes.tick_params(labelsize=style.SMALL, width=0.6, length=3, pad=2.5)
@@ -147,7 +163,7 @@ def _labels(axes, ends, x_low, x_high, y_high):
     across = (x_high - x_low) / ((SIZE[0] - LEFT - RIGHT) * 72)
     order = sorted(range(len(ends)), key=lambda k: (min(ends[k][0], y_high), ends[k][0], -k))
     wanted = [min(ends[k][0], y_high) for k in order]
-    places = style.spread(wanted, 10.4 * per_pt, -14 * per_pt, y_high + 16 * per_pt)
+    places = style.spread(wanted, 10.4 * per_pt, -12 * per_pt, y_high + 16 * per_pt)
     for k, y in zip(order, places):
         value, text, colour, look = ends[k]
         if value > y_high:
@@ -168,7 +184,7 @@ def _design(axes, connection, curve, demands, limits):
         return
     x, y = float(curve.lengths[at]), float(curve.envelope[at])
     axes.plot([x], [y], "o", color=style.INK, ms=6.5, mfc=style.PAPER, mew=1.6, zorder=6, gid="design")
-    text = f"this design: {curve.sweep.marks[at] + ', ' if curve.sweep.marks else ''}{floor_figures(y)} kip"
+    text = f"this design: {curve.sweep.marks[at] + ', ' if curve.sweep.marks else ''}{floor_figures(y)} {shown_as('kip', connection.basis.units_system)[0]}"
     x_low, x_high, y_high = limits
     px = (x_high - x_low) / ((SIZE[0] - LEFT - RIGHT) * 72)
     py = y_high / ((SIZE[1] - BOTTOM - TOP) * 72)
@@ -236,7 +252,9 @@ def _region(connection):
 def permissible_canvas(connection, region):
     """Return the matplotlib Figure of the permissible D against L, with the design point."""
     service = connection.inputs.service()
-    dead, live = service.get("D", 0.0), service.get("L", 0.0)
+    kip, times = shown_as("kip", connection.basis.units_system)
+    dead, live = times * service.get("D", 0.0), times * service.get("L", 0.0)
+    region = replace(region, x=times * region.x, y=times * region.y)
     size, left, bottom, right, top = (4.4, 2.6), 0.56, 0.46, 0.2, 0.14
     figure = style.canvas(*size)
     wide, tall = size[0] - left - right, size[1] - bottom - top
@@ -265,21 +283,22 @@ def permissible_canvas(connection, region):
         text = _loads(region.x_combination.text)
         axes.text(region.x[-1] + 4 * px, region.y[-1] / 2 - 2.5 * py, text, fontsize=style.SMALL, va="baseline", zorder=4)
     axes.plot([dead], [live], "o", color=style.ACCENT, ms=6, zorder=5, gid="design", clip_on=False)
-    _design_loads(axes, region, dead, live, px, py)
-    axes.set_xlabel("dead load D, kip", fontsize=style.TYPE, labelpad=3)
-    axes.set_ylabel("live load L, kip", fontsize=style.TYPE, labelpad=4)
+    _design_loads(axes, region, (dead, live, kip), px, py)
+    axes.set_xlabel(f"dead load D, {kip}", fontsize=style.TYPE, labelpad=3)
+    axes.set_ylabel(f"live load L, {kip}", fontsize=style.TYPE, labelpad=4)
     axes.tick_params(labelsize=style.SMALL, width=0.6, length=3, pad=2.5)
     for side in ("top", "right"):
         axes.spines[side].set_visible(False)
     return figure
 
 
-def _design_loads(axes, region, dead, live, px, py):
+def _design_loads(axes, region, loads, px, py):
     """Write the design's loads beside its point, below the boundary where there is room."""
-    text = f"D = {ceil_figures(dead)}, L = {ceil_figures(live)} kip"
+    dead, live, kip = loads
+    text = f"D = {ceil_figures(dead)}, L = {ceil_figures(live)} {kip}"
     wide = style.text_width(text, style.TYPE) * px
     if dead - wide - 8 * px > max(0.0, axes.get_xlim()[0]):
-        x, y, side = dead - 6 * px, live - 3 * py, "right"
+        x, y, side = dead - 6 * px, max(live - 3 * py, axes.get_ylim()[0] + 4 * py), "right"
     else:
         x, side = dead + 7 * px, "left"
         reach = float(np.interp(x + wide + 4 * px, region.x, region.y, right=0.0))

@@ -10,7 +10,7 @@ from . import style
 from .drafting import Drawing, broken, grouped
 from .scene import trace, view
 
-TALLEST = 3.1  # [in] of an elevation on paper: a figure, its caption and some text fit one sheet
+TALLEST = 2.7  # [in] of an elevation on paper: a figure, its caption and some text fit one sheet
 LARGEST = 0.38  # scale beyond which a small pattern looks coarse
 
 

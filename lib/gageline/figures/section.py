@@ -10,7 +10,7 @@ from .drafting import Drawing, grouped
 from .elevation import bolt_text
 from .scene import outline, plate_lo
 
-WIDEST, TALLEST, LARGEST = 3.1, 2.5, 0.5  # [in], [in] of drawing and dimensions on paper; scale
+WIDEST, TALLEST, LARGEST = 2.2, 2.4, 0.5  # [in], [in] of drawing and dimensions on paper; scale
 
 HEAD = (1.5, 0.125, 0.625, 0.98, 0.3)
 """Heavy hex bolt, about, for drawing only: width across flats 1.5 d + 1/8 in, height of head and of nut, and end of the thread

@@ -9,6 +9,8 @@ import io
 import logging
 from dataclasses import dataclass
 
+from ..units import drawn_in_si, told
+
 TEXT_WIDTH = 6.6
 """Width of the text of a sheet, about: 6.8 in on US Letter, 6.57 in on A4. [in]"""
 
@@ -97,6 +99,11 @@ def svg_text(figure):
     """
     from matplotlib.backends.backend_svg import FigureCanvasSVG
 
+    if drawn_in_si():
+        from matplotlib.text import Text
+
+        for text in figure.findobj(Text):
+            text.set_text(told(text.get_text(), "SI"))
     out = io.StringIO()
     FigureCanvasSVG(figure).print_svg(out, metadata={"Date": None, "Creator": None})
     return "\n".join(line.rstrip() for line in out.getvalue().splitlines()) + "\n"

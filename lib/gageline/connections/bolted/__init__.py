@@ -12,7 +12,7 @@ from ...facts import bolts as facts
 from ...facts import grades
 from ...geometry import End, Hole, centred_edge, grid, mirrored
 from ...geometry.pattern import least, most
-from .. import bolt_group, details, fatigue, net_section, plate, tear_out
+from .. import bolt_group, details, fatigue, net_section, plate, seismic, tear_out
 from ..base import Connection, Sweep, Table
 from ..element import element
 from ..fields import naming
@@ -47,6 +47,7 @@ class BoltedConnection(Connection):
         with naming("plate_grade"):
             self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
         refusals.installation(self)
+        self.demand = seismic.demand(self)
         self.joint = self._joint()
         if refuse_layout:
             refusals.layout(self)
@@ -229,6 +230,12 @@ class BoltedConnection(Connection):
                 continue
             found = evaluate()
             yield strength_check(id, title, part, clause, state, method, found.nominal, C, found.steps, axial, tension=False)
+
+    def brace(self):
+        """Return the member as a brace of a seismic system."""
+        part = self.element
+        return seismic.Brace(part.A_g, self.member_material.F_y, self.member_material.name, "plate" if part.series == "PL" else "rolled", part.r,
+                             self.inputs.member_length, self.inputs.plate_thickness)
 
     def fatigue_details(self, by_id):
         """Return the details that live load may crack: member and plate at their bolts."""

@@ -7,7 +7,7 @@ from ...check import worst_first
 from ...figures import style
 from ...figures.drafting import Drawing, broken
 from ...provisions import pin_plates, pins
-from ...units import ceil_figures, fraction, printed, ratio_text
+from ...units import ceil_figures, drawn_in_si, fraction, printed, ratio_text
 from .. import pin_plate
 
 TALLEST, LARGEST = 3.0, 0.5  # [in] of an elevation on paper; scale
@@ -135,7 +135,7 @@ def _between(stops):
 
 def _length(value):
     text = fraction(value)
-    return text if "." not in text else printed(value, 4)
+    return text if "." not in text or drawn_in_si() else printed(value, 4)
 
 
 def _labels(paper, connection, front_is_member, left, right, tall):

@@ -206,7 +206,7 @@ class RodConnection(Connection):
                 out += [fatigue.at_pin(end, f"{end} lug", lug.plate, lug.plate.w),
                         fatigue.Detail(f"{end} weld", f"{end} lug, root of its welds", end, "C", "Table A-3.1, 5.7, by its equation for fillets",
                                        (f"{end} yielding", "A_g"), root=(lug.w_f, lug.plate.t)),
-                        fatigue.throats(end, f"{end} lug, welds", f"{end} weld")]
+                        fatigue.throats(end, f"welds of the {end} lug", f"{end} weld")]
         return out
 
     # What the report says beside the checks

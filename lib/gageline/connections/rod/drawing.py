@@ -5,7 +5,7 @@ from itertools import pairwise
 
 from ...figures import style
 from ...figures.drafting import Drawing, broken
-from ...units import ceil_figures, fraction, printed, ratio_text
+from ...units import ceil_figures, drawn_in_si, fraction, printed, ratio_text
 from .attachments import Nut
 from .inputs import ENDS
 
@@ -17,7 +17,7 @@ EDGE = {"left": 46, "right": 50, "above": 34, "below": 46}  # [pt] round each en
 
 def _length(value):
     text = fraction(value)
-    return text if "." not in text else printed(value, 4)
+    return text if "." not in text or drawn_in_si() else printed(value, 4)
 
 
 class _End:

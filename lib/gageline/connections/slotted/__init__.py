@@ -12,7 +12,7 @@ from ...errors import InputError, ScopeError
 from ...facts import grades, hollow
 from ...facts import welds as filler
 from ...facts.shapes import shape as find_shape
-from .. import fatigue
+from .. import fatigue, seismic
 from .. import plate as plates
 from ..base import Connection, Sweep
 from ..joint import Gusset
@@ -61,6 +61,7 @@ class SlottedConnection(Connection):
                                                edition=self.basis.edition)
         self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
         self.electrode = filler.electrode(inputs.electrode)
+        self.demand = seismic.demand(self)
         self.joint = self._joint()
         refusals.geometry(self.joint, inputs)
         self.unjudged = refusals.filler(self.electrode, (("member", self.member_material, self.shape.t_nom),
@@ -198,6 +199,11 @@ class SlottedConnection(Connection):
             else:
                 found = evaluate(joint)
                 yield strength_check(id, title, part, clause, "compression", method, found.nominal, C, found.steps, True, tension=False)
+
+    def brace(self):
+        """Return the member as a brace of a seismic system."""
+        tube = self._tube()
+        return seismic.Brace(tube.A_g, tube.F_y, self.member_material.name, "hollow", tube.r, self.inputs.member_length, self.inputs.plate_thickness)
 
     def fatigue_details(self, by_id):
         """Return the details that live load may crack: tube and gusset at the ends of the welds, and their throats."""

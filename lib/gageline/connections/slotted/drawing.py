@@ -8,7 +8,7 @@ from math import cos, pi, sin
 
 from ...figures import style
 from ...figures.drafting import Drawing, broken
-from ...units import ceil_figures, fraction, ratio_text
+from ...units import ceil_figures, drawn_in_si, fraction, ratio_text
 
 TALLEST, LARGEST = 3.1, 0.5
 """Height of a drawing on paper and largest scale. [in]"""
@@ -320,7 +320,7 @@ def _section_labels(paper, c, out_x, reach, X, Y):
     joint = c.joint
     tube, pt, given = joint.tube, paper.pt, c.inputs
     texts = [((X - tube.t / 2, -0.45 * Y) if not tube.round else ((X - tube.t / 2) * cos(-0.45), (X - tube.t / 2) * sin(-0.45)),
-              f"{tube.name}, t = {tube.t:.3g}")]
+              f"{tube.name}, t = {fraction(tube.t) if drawn_in_si() else f'{tube.t:.3g}'}")]
     if joint.concentric:
         texts.append(((joint.plate.t / 2 + joint.leg * 0.4, Y + joint.leg * 0.3), f"4 fillets {fraction(joint.leg)}"))
         texts.append(((0.0, 0.5 * Y), f"PL {fraction(joint.plate.t, unit=' in')} a slot of {fraction(joint.plate.t + given.slot_clearance)}"))

@@ -57,8 +57,8 @@ def referred(name, evaluate, written_out=False):
             return found
         do = Working()
         whose = "two flange splices" if name == "flange" else "web splice"
-        do.say(f"That is the strength $Q_n$ of the {whose}; referred to the whole load of the member"
-               + (":" if written_out else " by the share of the check of the bolts alone:"))
+        do.say(f"That is $Q_n$ of the {whose}; referred to the whole load of the member"
+               + (":" if written_out else ", with the share as for bolts in shear:"))
         R_n = do(splices.referred_to_member, found.nominal, share(do if written_out else silent, splice, group))
         return Outcome(R_n, (*found.steps, *do.steps), found.path, found.notes)
 

@@ -8,7 +8,7 @@ from ... import units
 from ...check import not_applicable, strength_check
 from ...errors import ScopeError
 from ...facts import grades
-from .. import fatigue, plate, weld_group
+from .. import fatigue, plate, seismic, weld_group
 from ..base import Connection, Sweep, Table
 from ..element import element
 from . import layout, limits, strengths
@@ -37,6 +37,7 @@ class WeldedConnection(Connection):
         self.member_material = self._material(inputs.member_grade, inputs.member)
         self.plate_material = grades.material(inputs.plate_grade, form="plate", thickness=inputs.plate_thickness, edition=self.basis.edition)
         self.electrode = layout.filler(self)
+        self.demand = seismic.demand(self)
         self.end, self.exact = layout.build(self)
 
     def _material(self, grade, designation):
@@ -111,6 +112,12 @@ class WeldedConnection(Connection):
             return not_applicable(id, title, "plate", clause, "no combination gives compression")
         found = plate.compression(self.end)
         return strength_check(id, title, "plate", clause, "compression", self.basis.method, found.nominal, C, found.steps, True, tension=False)
+
+    def brace(self):
+        """Return the member as a brace of a seismic system."""
+        part = self.element
+        return seismic.Brace(part.A_g, self.member_material.F_y, self.member_material.name, "plate" if part.series == "PL" else "rolled", part.r,
+                             self.inputs.member_length, self.inputs.plate_thickness)
 
     def fatigue_details(self, by_id):
         """Return the details that live load may crack: member and plate at the ends of the welds, and their throats."""
