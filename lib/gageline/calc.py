@@ -72,7 +72,8 @@ class Calc:
         self.project_path = project_path
         self.project = project.load(project_path)
         made = families.family(family)
-        self.connection = made(made.Model.of(**{name: each.value for name, each in given.items()}), self.project.basis)
+        with units.lengths_in("SI" if self.project.units == "SI" else "US"):  # names of plates hold their dimensions
+            self.connection = made(made.Model.of(**{name: each.value for name, each in given.items()}), self.project.basis)
 
     @property
     def sources(self):
@@ -103,8 +104,8 @@ class Calc:
         with units.lengths_in(system):
             items = [("assumption", text if basis == "engineer" else units.told(text, system), basis, True)
                      for text, basis in self.connection.assumptions()]
-        items += [("open item", text, "engineer" if text in asked else "a check of this calculation", not text.endswith(presenting.FAILED))
-                  for text in self.connection.open_items()]
+            items += [("open item", text if text in asked else units.told(text, system), "engineer" if text in asked else "a check of this calculation",
+                       not text.endswith(presenting.FAILED)) for text in self.connection.open_items()]
         items += [("open item", f"Inputs without a source: {', '.join(unsourced)}.", "inputs", False)] if unsourced else []
         items += [("open item", f"Inputs overridden at the run: {', '.join(overridden)}.", "inputs", False)] if overridden else []
         counts = {"assumption": 0, "open item": 0}
@@ -179,7 +180,8 @@ class Calc:
 
     def drawing(self):
         """Return the connection as designed: what is to be built, elevation with the governing path, cross-section."""
-        with units.lengths_in(self.project.units):
+        # A figure has no room for two systems: dual ones stay in inches.
+        with units.lengths_in("SI" if self.project.units == "SI" else "US"):
             drawn = self.connection.drawings()
         return Part([sheet.heading(text="Connection as designed"), presenting.designed(self.connection),
                      *(presenting.figure(each, self.project.units, dimensioned=True) for each in drawn)])

@@ -56,9 +56,9 @@ def rows(family):
         except importlib.metadata.PackageNotFoundError:
             versions.append(f"{name} not installed")
     root = templates_root()
-    return [("Program", f"gageline {__version__}"), ("Code and tables, SHA-256", program_hash()),
+    program = f"gageline {__version__} on Python {platform.python_version()}, {platform.system()} {platform.machine()}"
+    return [("Program", f"{program}; modulus of elasticity of steel 29 000 ksi"), ("Code and tables, SHA-256", program_hash()),
             ("Verification manual", verification_id() or "published cases are not installed"),
-            (f"Shipped template {family}.ipynb, SHA-256", file_hash(root / f"{family}.ipynb")),
-            ("Shipped sheet, SHA-256", file_hash(root / "sheet" / "sheet.typ")),
-            ("Stands on", ", ".join(versions)), ("Python", f"{platform.python_version()} on {platform.system()} {platform.machine()}"),
-            ("Modulus of elasticity", "29 000 ksi")]
+            (f"Template {family}.ipynb, SHA-256", file_hash(root / f"{family}.ipynb")),
+            ("Sheet, SHA-256", file_hash(root / "sheet" / "sheet.typ")),
+            ("Stands on", ", ".join(versions))]

@@ -68,9 +68,11 @@ def available(each, system="US"):
 
 
 def figure(drawn, system="US", dimensioned=False):
-    """Return a drawn figure as a block; under a dimensioned one stands the unit, where the project has another than the trade's inches."""
-    said = {"US": "", "SI": " Dimensions in mm.", "dual": " Dimensions in inches."}[system] if dimensioned else ""
-    return sheet.figure(svg=drawn.svg, caption=units.told(drawn.caption, system) + said, alt=units.told(drawn.alt, system), width=drawn.width)
+    """Return a drawn figure as a block; a dimensioned one says its unit."""
+    caption = drawn.caption.replace("dimensions in inches", "dimensions in mm") if system == "SI" else drawn.caption
+    if system != "US" and dimensioned and "imensions in" not in caption:
+        caption += f" Dimensions in {'mm' if system == 'SI' else 'inches'}."
+    return sheet.figure(svg=drawn.svg, caption=units.told(caption, system), alt=units.told(drawn.alt, system), width=drawn.width)
 
 
 UNITS = {"US": "kip, inch, ksi", "SI": "kN, mm, MPa (1 MPa = 1 N/mm²; 1 kN = 1000 N)", "dual": "kip, inch, ksi; results also in kN, mm, MPa in brackets"}
@@ -227,20 +229,23 @@ def steps(done, edition, system="US", worked=None, title=""):
     title : of this check.
     """
     out, worked, k = [], {} if worked is None else worked, 0
-    before = dict(worked)
+    before = {key: check for key, check in worked.items() if key != _call(done[-1])}  # the available strength is always written out
     while k < len(done):
-        step, repeated = done[k], []
-        while k + len(repeated) < len(done) and (source := before.get(_call(done[k + len(repeated)]))) and source == before.get(_call(step)):
-            repeated.append(done[k + len(repeated)])
+        step, end = done[k], k
+        while end < len(done) and before.get(_call(done[end])) == before.get(_call(step), "none"):
+            end += 1
+        while end > k and isinstance(done[end - 1], str):  # a remark stays with the line it introduces
+            end -= 1
+        repeated = [each for each in done[k:end] if not isinstance(each, str)]
         if len(repeated) >= LEAST_REPEATED:
             out.append(_as_before(before[_call(step)], repeated, edition, system))
-            k += len(repeated)
+            k = end
             continue
         k += 1
+        worked[_call(step)] = title
         if isinstance(step, str):
             out.append(sheet.prose(runs=runs_of(step)))
             continue
-        worked.setdefault(_call(step), title)
         formula, values = step
         lines = [line.rendered(system) for line in formula.lines(*values, edition=edition)]
         out.append(sheet.equation(lines=[{"lhs": line.sign, "rows": [row for row in (line.symbolic, line.numeric, line.result) if row]}
@@ -250,8 +255,8 @@ def steps(done, edition, system="US", worked=None, title=""):
 
 
 def _call(step):
-    """Return what tells a formula call from others: the formula and its values; None for a remark."""
-    return None if isinstance(step, str) else (id(step[0]), *map(repr, step[1]))
+    """Return what tells a step from others: a remark's text, or the formula and its values."""
+    return step if isinstance(step, str) else (id(step[0]), *map(repr, step[1]))
 
 
 def _as_before(title, repeated, edition, system):
@@ -321,7 +326,7 @@ def _detailing(connection):
                {"head": "Provided", "align": "right"}, {"head": "D/C", "align": "right"}, {"head": ""}]
     remarks = dict.fromkeys(remark for each in connection.checks if each.kind != "strength" for remark in each.notes)
     return [sheet.heading(text=connection.parts["detailing"]), sheet.table(columns=columns, rows=rows),
-            *(sheet.note(runs=remark) for remark in remarks)]
+            *([sheet.note(runs=" ".join(remarks))] if remarks else [])]
 
 
 def _in_si(made):

@@ -87,9 +87,10 @@ def _tidy(body):
     return re.sub(r"\s+", " ", body)
 
 
-def _fill(template, texts, joint):
+def _fill(template, texts, joint, bases=None):
     out = template.replace(r"\cdot", joint) if joint != r"\cdot" else template
     for i, text in enumerate(texts):
+        out = out.replace(f"{chr(_SLOT + i)}^", f"{(bases or texts)[i]}^")
         out = out.replace(chr(_SLOT + i), text)
     return out
 
@@ -140,10 +141,10 @@ def render_line(line, system="US"):
     texts, result = _numbers(line, system)
     shown = {name: units.shown_as(SYMBOLS[name].unit, system)[0] for name in body.names}
     unit = units.shown_as(wanted.unit, system)[0]
-    bases = {name for name in body.names if re.search(rf"{chr(_SLOT + body.names.index(name))}\^", template)}
     symbolic = _fill(template, [SYMBOLS[name].latex for name in body.names], r"\,")
-    filled = [value_latex(text, shown[name], name in bases) for text, name in zip(texts, body.names)]
-    numeric = _fill(template, filled, r"\cdot") if body.names else ""
+    filled = [value_latex(text, shown[name]) for text, name in zip(texts, body.names)]
+    bracketed = [value_latex(text, shown[name], True) for text, name in zip(texts, body.names)]
+    numeric = _fill(template, filled, r"\cdot", bracketed) if body.names else ""
     printed = value_latex(result, unit)
     spoken = f"{result} {_SPOKEN_UNIT[unit]}".strip()
     other, factor = units.shown_as(wanted.unit, "SI")

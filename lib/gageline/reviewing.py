@@ -15,7 +15,10 @@ def review(calc):
     rows = [{"cells": [role.capitalize(), each["who"], each["when"][:10], each["method"] or "–"]} if each
             else {"cells": [role.capitalize()], "span_reason": [1, "not signed"]}
             for role, each in zip(ROLES, held)]
-    out.append(sheet.table(columns=[{"head": "Role"}, {"head": "Name"}, {"head": "Date"}, {"head": "Method of check"}], rows=rows))
+    if any(held):
+        out.append(sheet.table(columns=[{"head": "Role"}, {"head": "Name"}, {"head": "Date"}, {"head": "Method of check"}], rows=rows))
+    else:
+        out.append(sheet.prose(runs=f"Not signed yet by {', '.join(ROLES[:-1])} or {ROLES[-1]}."))
     if checker := held[ROLES.index("checker")]:
         out += [sheet.heading(text="Checker's list", level=2),
                 sheet.pairs(rows=[[name.capitalize(), checker["findings"][name], ""] for name in HEADINGS])]

@@ -124,7 +124,7 @@ def _demands(connection):
 
 def _sentence(connection, curve):
     T, sweep = connection.demand.required_tension, curve.sweep
-    said, envelope = f"{units.ceil_figures(T)} kip", curve.envelope
+    said, envelope = f"{units.force(T, units.ceil_figures)}", curve.envelope
 
     def limit(i):
         return curve.titles[min(curve.strengths, key=lambda id: curve.strengths[id][i])]
@@ -132,11 +132,11 @@ def _sentence(connection, curve):
     enough = np.flatnonzero(envelope >= T * (1 - 1e-12))
     if not len(enough):
         best = int(np.argmax(envelope))
-        return (f"No length up to {sweep.describe(len(envelope) - 1)} carries {said}: the most is {units.floor_figures(envelope[best])} kip, "
+        return (f"No length up to {sweep.describe(len(envelope) - 1)} carries {said}: the most is {units.force(envelope[best], units.floor_figures)}, "
                 f"limited by: {limit(best)}.")
     i = int(enough[0])
     text = (f"The shortest connection that carries {said} in every limit state is {sweep.describe(i)}; "
-            f"governing there: {limit(i)}, {units.floor_figures(envelope[i])} kip.")
+            f"governing there: {limit(i)}, {units.force(envelope[i], units.floor_figures)}.")
     if sweep.design is not None and sweep.design != i:
         text += f" This design has {sweep.describe(sweep.design)}."
     return text

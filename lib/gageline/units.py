@@ -178,6 +178,15 @@ def lengths_in(system):
         _LENGTHS.reset(token)
 
 
+def force(value, rounded):
+    """Return kips rounded with their unit, or kN, or both, as the block of ``lengths_in`` has it; rounded once, so never the wrong way.
+
+    >>> force(123.4, ceil_figures)
+    '124 kip'
+    """
+    return amount(value, "kip", _LENGTHS.get(), rounded)
+
+
 def drawn_in_si():
     """Return whether lengths are being written in millimetres."""
     return _LENGTHS.get() == "SI"
@@ -195,10 +204,10 @@ def millimetres(value):
 
 
 _ONE = r"(?:\d+-\d+/\d+|\d+/\d+|\d*[¼½¾⅛⅜⅝⅞]|\d+(?: \d{3})*(?:\.\d+)?)"
-_TOLD = re.compile(rf"(?<![\w.,/’'-])(?P<numbers>{_ONE}(?:(?: x | × | to | and | by |–){_ONE})*)"
+_TOLD = re.compile(rf"(?<![\w.,/’'-])(?<!bolts )(?<!bolt )(?P<numbers>{_ONE}(?:(?: x | × | to | and | by |–){_ONE})*)"
                    r"(?P<gap>[ -])(?P<unit>kip/in|kip·in|kip inches|kips?|ksi|in[²³]|inches|in\.(?= [a-z(])|in)(?![\w²³/·^])"
-                   r"(?! (?:the|line|lines|series|tension|shear|bearing|a row)\b)(?! \(\d)(?P<also> \(−\d[\d.]*\))?")
-# "2 in line" is no length; what has a number in brackets behind it stands in both systems already.
+                   r"(?! (?:the|line|lines|series|tension|shear|bearing|a row)\b)(?! bolt|,? [AF]\d{3})(?! \(\d)(?P<also> \(−\d[\d.]*\))?")
+# "2 in line" is no length; an inch bolt keeps its name; what has a number in brackets behind it stands in both systems already.
 _TOLD_UNIT = {"kips": "kip", "inches": "in", "in.": "in", "kip inches": "kip·in"}
 
 

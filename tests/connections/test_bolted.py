@@ -30,7 +30,7 @@ each_base = pytest.mark.parametrize("base", BASES.values(), ids=BASES)
 ORDER = ["member yielding", "member rupture", "member block", "bolt shear", "bolts member", "bolts plate", "slip", "plate yielding",
          "plate rupture", "Whitmore yielding", "Whitmore rupture", "plate block", "bolts member reversed", "bolts plate reversed",
          "gusset compression", "spacing min", "spacing max", "member end edge", "member side edge", "member max edge", "plate end edge",
-         "plate side edge", "plate max edge", "wrench", "slenderness"]
+         "plate side edge", "plate max edge", "wrench", "slenderness", "fatigue"]
 
 STRONG = {"plates": 2, "plate_thickness": "1 in", "bolt_grade": "A490", "threads": "X"}
 """Bolts and plates that leave the member's holes to govern."""

@@ -28,7 +28,7 @@ EYEBAR = PLATE | {"member_kind": "eyebar", "member_thickness": "5/8 in", "member
 
 ORDER = ["member tension rupture", "member shear rupture", "member bearing", "member yielding", "pin shear yielding", "pin shear rupture",
          "pin bending", "support tension rupture", "support shear rupture", "support bearing", "support yielding", "compression", "member hole",
-         "member width", "member edge", "member corner", "support hole", "support width", "support edge", "support corner"]
+         "member width", "member edge", "member corner", "support hole", "support width", "support edge", "support corner", "fatigue"]
 
 
 def pinned(base=PLATE, *, edition="360-22", method="LRFD", **changes):

@@ -59,7 +59,7 @@ class TestListOfChecks:
     def test_every_limit_state_stands_in_order_with_numbers_or_a_reason(self, base, edition, reversing):
         connection = slotted(base, edition=edition, **reversing)
 
-        assert tuple(each.id for each in connection.checks if each.kind == "strength") == ORDER
+        assert tuple(each.id for each in connection.checks if each.kind == "strength") == (*ORDER, "fatigue")
         for each in connection.checks:
             if each.applies:
                 assert each.available > 0 and math.isfinite(each.ratio), each.id

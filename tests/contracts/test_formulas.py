@@ -1,6 +1,7 @@
 """Contracts of every formula: symbols, docstring, three uses that agree, and a print that recomputes."""
 
 import ast
+import functools
 import inspect
 import math
 import random
@@ -262,6 +263,66 @@ class TestPrint:
         made = EVERY["gageline.provisions.bolts.first_like_bolts"]
 
         assert made.lines(4, 20)[0].rendered().latex == made.lines(4.0, 20.0)[0].rendered().latex
+
+
+PRINTED = {"in": "mm", "in²": "mm**2", "in³": "mm**3", "kip": "kN", "ksi": "MPa", "kip/in": "kN/mm", "kip·in": "kN*m", "1/in": "1/mm"}
+"""Display unit -> the registry's expression of the unit printed in SI; the registry's own definitions are the second way."""
+
+
+@functools.cache
+def inch_per(unit):
+    """Return by how much a printed SI number is multiplied to come to kip and inch, by the unit registry."""
+    if unit not in PRINTED:
+        return 1.0
+    return float(units.registry().Quantity(1.0, PRINTED[unit]).to(units.DISPLAY[unit]).magnitude)
+
+
+class TestPrintInSI:
+    """The printed numbers, with their printed units, recompute to the printed result."""
+
+    def test_every_unit_of_the_symbols_has_its_si_twin(self):
+        assert {symbol.unit for symbol in SYMBOLS.values()} - set(PRINTED) == {"", "rad"}
+        for unit in PRINTED:
+            assert units.shown_as(unit, "SI")[1] * inch_per(unit) == pytest.approx(1.0, rel=1e-14)
+
+    @each_formula
+    def test_printed_si_numbers_recompute_to_the_printed_result(self, made):
+        for line in printed_lines(made, 12):
+            shown = line.rendered("SI")
+            scope = {name: float(text) * inch_per(SYMBOLS[name].unit) for name, text in zip(line.body.names, shown.inputs_printed)}
+            again = eval(line.body.code, dict(_NAMESPACE) | scope) / inch_per(SYMBOLS[line.symbol].unit)
+            half = 0.5 * 10.0 ** -len(shown.result_printed.partition(".")[2])
+
+            assert abs(again - float(shown.result_printed)) <= half * (1 + 1e-5), (shown.latex, again)
+
+    @each_formula
+    def test_si_lines_hold_no_inch_and_say_their_units(self, made):
+        for line in printed_lines(made, 2):
+            shown = line.rendered("SI")
+
+            assert not re.search(r"\\text\{(in|kip|ksi)", shown.latex) and not re.search(r"\b(inches|kips?|ksi)\b", shown.reading.replace(
+                SYMBOLS[line.symbol].meaning, ""))
+            assert bool(SYMBOLS[line.symbol].unit) == (r"\text{" in shown.result)
+
+    @each_formula
+    def test_dual_is_the_us_line_with_the_result_in_si(self, made):
+        for line in printed_lines(made, 4):
+            us, dual = line.rendered(), line.rendered("dual")
+
+            assert (dual.symbolic, dual.numeric, dual.inputs_printed, dual.result_printed) == (us.symbolic, us.numeric, us.inputs_printed, us.result_printed)
+            if SYMBOLS[line.symbol].unit not in PRINTED:
+                assert dual == us
+                continue
+            bracket = re.fullmatch(re.escape(us.result) + r"\\;\\left\(([-\d.]+)\\,.*\\right\)", dual.result)
+            assert float(bracket[1]) * inch_per(SYMBOLS[line.symbol].unit) == pytest.approx(line.result, rel=6e-4, abs=6e-6)
+
+    def test_a_line_known_by_hand(self):
+        """50 ksi on 3.75 in²: 187.5 kip, times 4.4482216 is 834.04 kN; 50 ksi is 344.74 MPa, 3.75 in² is 2419.35 mm²."""
+        line = EVERY["gageline.provisions.tension.gross_yielding"].lines(50.0, 3.75)[-1]
+
+        assert line.rendered("SI").result == r"834.0\,\text{kN}"
+        assert line.rendered("dual").result == r"187.5\,\text{kip}\;\left(834.0\,\text{kN}\right)"
+        assert line.rendered("SI").numeric.startswith(r"344.7") and r"\text{mm}^{2}" in line.rendered("SI").numeric
 
 
 def body_of(made):

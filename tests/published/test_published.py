@@ -23,6 +23,7 @@ from helpers import checks, formulas, value_of
 from gageline import families, geometry
 from gageline.check import FACTORS
 from gageline.facts import bolts as bolt_facts
+from gageline.facts import fatigue as fatigue_facts
 from gageline.facts import shapes
 from gageline.formula import EDITIONS
 from gageline.geometry.whitmore import whitmore
@@ -67,7 +68,7 @@ def namespace():
         _, _, module, function = name.split(".")
         setattr(modules[module], function, made.bare)
     facts = {"group": bolt_facts.bolt_group, "hole": bolt_facts.hole, "pretension": bolt_facts.pretension,
-             "minimum_edge": bolt_facts.minimum_edge, "shape": shapes.shape}
+             "minimum_edge": bolt_facts.minimum_edge, "shape": shapes.shape, "fatigue_facts": fatigue_facts}
     return {**modules, **facts, **{name: getattr(geometry, name) for name in geometry.__all__}, "whitmore": whitmore,
             "radians": math.radians}
 

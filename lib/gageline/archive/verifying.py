@@ -6,7 +6,7 @@ import tomllib
 from dataclasses import dataclass, field
 from pathlib import Path
 
-from .. import __version__, families, identity, store
+from .. import __version__, families, identity, store, units
 from ..editions import Basis
 from ..errors import GagelineError, ReportError
 from . import records
@@ -120,7 +120,7 @@ def _recomputed(files, found):
     try:
         inputs, results = json.loads(files["inputs.json"]), json.loads(files["results.json"])
         project = tomllib.loads(files["project.toml"].decode())
-        basis = Basis(results["edition"], results["method"], results["loads"])
+        basis = Basis(results["edition"], results["method"], results["loads"], results.get("units", "US"))
         family = families.family(results["family"])
         values = {name: each["value"] for name, each in inputs.items()}
         made_by = json.loads(files.get("versions.json", b"{}"))
@@ -134,7 +134,8 @@ def _recomputed(files, found):
         found.facts.append(f"made by {made_by.get('Program', 'an unknown version')}; computed again by gageline {__version__}, "
                            + ("the same code and tables" if same else "other code or tables"))
     try:
-        again = family(family.Model.of(**values), basis).to_dict()
+        with units.lengths_in("SI" if basis.units_system == "SI" else "US"):
+            again = family(family.Model.of(**values), basis).to_dict()
     except GagelineError as error:
         found.differences.append(f"the installed version refuses the inputs: {error}")
         return

@@ -95,10 +95,10 @@ SERVICE = {"D": "P_D", "L": "P_L", "Lr": "P_Lr", "S": "P_S", "R": "P_R", "W": "P
 
 
 METRIC_CONSTANTS = (
-    "The Specification's metric constants are used for the allowance for damage at holes (2 mm), long joints (950 mm), fillers (6 mm, 0.0154 per mm), "
-    "upper limits of spacing and edge distance (300, 180 and 150 mm) and the effective width beside a pin hole (16 mm). Strengths of steels, bolts "
-    "and filler metals, E, least sizes and edge margins of fillet welds, clearances of pins and other limits of length are those of the inch "
-    "tables, converted exactly; the rounded metric twins may differ from them by up to one unit of their last digit.")
+    "The Specification's metric constants are used for the allowance for damage at holes (2 mm), long joints (950 mm), fillers (6 mm, 0.0154 "
+    "per mm), upper limits of spacing and edge distance (300, 180 and 150 mm) and the effective width beside a pin hole (16 mm). Strengths of "
+    "steels, bolts and filler metals, E, least sizes and edge margins of fillet welds, clearances of pins and all other limits of length are those "
+    "of the inch and ksi tables, converted exactly; the Specification's rounded metric values of these are not used.")
 """What is metric and what is converted where a project is in SI; printed as an assumption."""
 
 

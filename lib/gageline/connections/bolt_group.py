@@ -150,11 +150,3 @@ def slip_factor(joint):
     if kinds & {"OVS", "SSL along"}:
         return "slip, oversized holes or short slots along"
     return "slip, standard holes or short slots across"
-
-
-def stricter_note(joint):
-    """Return the remark on the safe alternative: each bolt limited by the weaker of its two plies."""
-    sums = bolt_table(joint)["sums"]
-    return (f"Nominal sums: by member holes {sums['member']:.4g} kip, by plate holes {sums['plate']:.4g} kip; each bolt limited by the "
-            f"weaker ply, a stricter reading, {sums['stricter']:.4g} kip.",)
-

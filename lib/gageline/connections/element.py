@@ -126,6 +126,8 @@ def _flat(designation, t, w):
 
 
 def _fraction(value):
+    if units.drawn_in_si():
+        return units.millimetres(value)
     return str(Fraction(value).limit_denominator(32)) if abs(value * 32 - round(value * 32)) < 1e-9 and value < 1 else units.fraction(value)
 
 

@@ -58,7 +58,7 @@ def checks(c, made):
     if not asked(c.inputs):
         why = "no cycles are given: no more than 20 000 cycles of live load are taken for granted" if c.inputs.fatigue_cycles is None else \
             f"{c.inputs.fatigue_cycles:,.0f} cycles of live load, not more than 20 000".replace(",", " ", 1)
-        yield not_applicable(ID, TITLE, last, CLAUSE, why)
+        yield not_applicable(ID, f"{TITLE}, every detail", last, CLAUSE, why)
         return
     by_id = {each.id: each for each in made}
     for detail in c.fatigue_details(by_id):

@@ -114,7 +114,7 @@ def _of_brace(c, each, R_t):
     do = Working()
     if each.id == "member yielding":
         demand = c.demand.service.required_tension
-        notes = (*notes, f"Yielding of the brace is what the system counts on: the check is for the loads, {units.ceil_figures(demand)} kip.")
+        notes = (*notes, f"Yielding of the brace is what the system counts on: the check is for the loads, {units.force(demand, units.ceil_figures)}.")
     else:
         do.say("Rupture of the brace against its own expected yielding may count on its expected tensile strength (341 A3.2, from memory).")
         nominal = do(seismic.expected_rupture, R_t, nominal)

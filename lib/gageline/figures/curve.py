@@ -5,7 +5,7 @@ from dataclasses import replace
 import numpy as np
 
 from ..loads import permissible_region
-from ..units import ceil_figures, floor_figures, fraction, shown_as
+from ..units import ceil_figures, floor_figures, force, fraction, shown_as
 from . import style
 
 LABELS = {
@@ -57,7 +57,7 @@ def capacity_canvas(connection, curve):
         governs = value == demands[0][1]
         look = {"color": style.ACCENT, "lw": 1.4 if governs else 0.8}
         axes.plot([x_low, x_high], [value, value], zorder=4.5, gid="demand", **look)
-        ends.append((value, f"{_loads(text)} = {ceil_figures(value)} {kip}", style.ACCENT, look))
+        ends.append((value, _demand_label(_loads(text), f" = {ceil_figures(value)} {kip}"), style.ACCENT, look))
     _labels(axes, ends, x_low, x_high, y_high)
     _not_drawn(axes, rest, x_low, x_high, y_high, kip)
     _design(axes, connection, curve, demands, (x_low, x_high, y_high))
@@ -79,7 +79,18 @@ def _in_units(curve, connection):
 
 def _loads(text):
     """Return natures of loads as they are printed; W′ is the wind in the opposite sense."""
-    return text.replace("W_opposite", "W′").replace("W_opp", "W′").replace("Ω_0", "Ω₀")
+    return text.replace("W_opposite", "W′").replace("W_opp", "W′").replace("Ω_0", "Ω₀").replace("S_DS", "SDS").replace("Q_E", "QE")
+
+
+def _demand_label(text, value):
+    """Return a combination with its value; its last terms are left out where the column of labels is too narrow for them."""
+    kept, more = text, ""
+    while style.text_width(kept + more + value, style.SMALL) > RIGHT * 72 - 37:
+        cut = max(kept.rfind(" + "), kept.rfind(" − "))
+        if cut <= max(kept.rfind(")"), 0):
+            break
+        kept, more = kept[:cut], " + …"
+    return kept + more + value
 
 
 def _demands(curve):
@@ -235,9 +246,9 @@ def capacity_curve(connection, curve):
         caption += f"; thin solid, {curve.sweep.stretched_name or 'another way to lengthen it'}"
     caption += ". Horizontal lines: required tension of the load combinations." if len(curve.demands) > 1 else ". Horizontal line: required tension."
     at = curve.sweep.design
-    here = "" if at is None else f" The design ({curve.sweep.describe(at)}) has {floor_figures(float(curve.envelope[at]))} kip."
+    here = "" if at is None else f" The design ({curve.sweep.describe(at)}) has {force(float(curve.envelope[at]), floor_figures)}."
     alt = (f"Diagram of {len(curve.strengths)} limit states over lengths of {fraction(float(curve.lengths[0]))} to "
-           f"{fraction(float(curve.lengths[-1]), unit=' in')}; the largest demand is {ceil_figures(curve.demands[0][1])} kip.{here} {curve.sentence}")
+           f"{fraction(float(curve.lengths[-1]), unit=' in')}; the largest demand is {force(curve.demands[0][1], ceil_figures)}.{here} {curve.sentence}")
     return style.Figure(svg, caption, alt, width)
 
 
@@ -255,7 +266,7 @@ def permissible_canvas(connection, region):
     kip, times = shown_as("kip", connection.basis.units_system)
     dead, live = times * service.get("D", 0.0), times * service.get("L", 0.0)
     region = replace(region, x=times * region.x, y=times * region.y)
-    size, left, bottom, right, top = (4.4, 2.6), 0.56, 0.46, 0.2, 0.14
+    size, left, bottom, right, top = (4.2, 2.3), 0.56, 0.46, 0.2, 0.14
     figure = style.canvas(*size)
     wide, tall = size[0] - left - right, size[1] - bottom - top
     axes = figure.add_axes((left / size[0], bottom / size[1], wide / size[0], tall / size[1]))
@@ -324,11 +335,11 @@ def permissible_loads(connection):
         drawn = permissible_canvas(connection, region)
         svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
     others = [_loads(nature) for nature in connection.inputs.service() if nature not in ("D", "L")]
-    capacity = f"{floor_figures(connection.capacity)} kip"
+    capacity = f"{force(connection.capacity, floor_figures)}"
     fixed = f", with {', '.join(others)} as given" if others else ""
     caption = (f"Permissible dead load against live load for the available strength of {capacity} in tension{fixed}; along the boundary the "
                "combination that limits. Dot: this design.")
     dead, live = (connection.inputs.service().get(nature, 0.0) for nature in "DL")
-    alt = (f"Region of dead and live load permitted by {capacity}: at most {floor_figures(float(region.x[-1]))} kip of D without L, "
-           f"{floor_figures(float(region.y[0]))} kip of L without D; the design has D = {ceil_figures(dead)} kip and L = {ceil_figures(live)} kip.")
+    alt = (f"Region of dead and live load permitted by {capacity}: at most {force(float(region.x[-1]), floor_figures)} of D without L, "
+           f"{force(float(region.y[0]), floor_figures)} of L without D; the design has D = {force(dead, ceil_figures)} and L = {force(live, ceil_figures)}.")
     return style.Figure(svg, caption, alt, width)

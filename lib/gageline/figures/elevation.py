@@ -5,7 +5,7 @@ from itertools import pairwise
 
 from ..check import worst_first
 from ..geometry import Block, Chain, lines_of
-from ..units import ceil_figures, fraction, ratio_text
+from ..units import ceil_figures, drawn_in_si, force, fraction, ratio_text
 from . import style
 from .drafting import Drawing, broken, grouped
 from .scene import trace, view
@@ -278,13 +278,16 @@ def _labels(paper, seen, connection, base):
     wide = [pt(style.text_width(text, style.TYPE)) for _, _, text in texts]
     member_x = seen.left + min(wide[0] / 2, pt(14))
     start, stop = seen.left - pt(6), seen.wide[1] + pt(4)
+    for bolts in (bolts, f"{joint.n_bolts} bolt{'s' if joint.n_bolts > 1 else ''}"):
+        wide[1] = pt(style.text_width(bolts, style.TYPE))
+        if fits := start + wide[0] + wide[1] + wide[2] + pt(28) <= stop:
+            break
     centre = min(max(low.x, start + wide[0] + pt(14) + wide[1] / 2), stop - wide[2] - pt(14) - wide[1] / 2)
-    fits = start + wide[0] + wide[1] + wide[2] + pt(28) <= stop
     paper.text(start, base, texts[0][2])
     paper.line([(member_x, base + pt(8)), (member_x, seen.lo)], style.HAIR, z=4.6)
     plate_x = stop - min(wide[2] / 2, pt(14))
     foot = seen.shown_lo
-    paper.text(stop, base, plate, ha="right")
+    paper.text(max(stop, start + wide[0] + pt(12) + wide[2]), base, plate, ha="right")
     paper.line([(plate_x, base + pt(8)), (min(plate_x, seen.right - pt(3)), foot)], style.HAIR, z=4.6)
     if fits:
         paper.text(centre, base, bolts, ha="center")
@@ -303,7 +306,7 @@ def _pointed_at(joint):
 
 def bolt_size(connection):
     """Return the size of the bolts, in fractions of an inch or as metric."""
-    return connection.size.name if connection.size.metric else fraction(connection.size.d, unit=" in")
+    return connection.size.name if connection.size.metric else (f"{connection.size.name} in" if drawn_in_si() else fraction(connection.size.d, unit=" in"))
 
 
 def bolt_text(connection):
@@ -315,9 +318,9 @@ def bolt_text(connection):
 def _force(connection):
     sign = "Pᵤ" if connection.basis.method == "LRFD" else "Pₐ"
     demand = connection.demand
-    lines = [f"{sign} = {ceil_figures(demand.required_tension)} kip"]
+    lines = [f"{sign} = {force(demand.required_tension, ceil_figures)}"]
     if demand.required_compression > 0:
-        lines.append(f"(−{ceil_figures(demand.required_compression)} kip)")
+        lines.append(f"(−{force(demand.required_compression, ceil_figures)})")
     return lines
 
 

@@ -30,7 +30,7 @@ def paths_canvas(connection):
     def scale_for(columns):
         rows = math.ceil(len(checks) / columns)
         wide = (style.TEXT_WIDTH - gap * (columns - 1)) / columns
-        return min((wide - 2 * edge / 72) / across, (min(tallest, 5.0 / rows) - words / 72) / tall, 0.3)
+        return min((wide - 2 * edge / 72) / across, (min(tallest, 3.7 / rows) - words / 72) / tall, 0.3)
 
     columns = max(range(2, max(3, min(len(checks), 3) + 1)), key=lambda n: (round(scale_for(n), 4), -n))
     scale = scale_for(columns)

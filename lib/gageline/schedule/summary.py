@@ -78,8 +78,10 @@ def _marks(found):
         others = [check["title"] for check in mark.results["checks"] if check["applies"] and check["ok"] is False and check["kind"] != "advice"
                   and check["id"] != governs["id"]]
         said = governs["title"] + (f"; N.G. too: {_list_of(others)}" if others else "")
-        rows.append({"cells": [mark.mark, mark.family, said, governs["clause"], f"{units.ceil_figures(governs['demand'])} kip",
-                               f"{units.floor_figures(governs['available'])} kip", units.ratio_text(mark.results["ratio"]), "OK" if ok else "N.G."],
+        system = mark.results.get("units", "US")
+        rows.append({"cells": [mark.mark, mark.family, said, governs["clause"], units.amount(governs["demand"], "kip", system, units.ceil_figures),
+                               units.amount(governs["available"], "kip", system, units.floor_figures), units.ratio_text(mark.results["ratio"]),
+                               "OK" if ok else "N.G."],
                      "strong": not ok})
     if not rows:
         return [sheet.prose(runs="No mark was made.")]

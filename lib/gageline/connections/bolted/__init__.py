@@ -203,9 +203,8 @@ class BoltedConnection(Connection):
                 yield not_applicable("Whitmore yielding", "Plate, yielding on the Whitmore width", "plate", "J4.1(a)", "one bolt has no Whitmore width")
                 yield not_applicable("Whitmore rupture", "Plate, rupture on the Whitmore width", "plate", "J4.1(b)", "one bolt has no Whitmore width")
             found = evaluate(joint)
-            notes = (*found.notes, *(bolt_group.stricter_note(joint) if id == "bolts plate" else ()))
             demand = max(T, C) if id in ("bolt shear", "slip") else T
-            yield strength_check(id, title, part, clause, state, method, found.nominal, demand, found.steps, axial, path=found.path, notes=notes)
+            yield strength_check(id, title, part, clause, state, method, found.nominal, demand, found.steps, axial, path=found.path, notes=found.notes)
         yield from self._compression_checks(C)
         yield details.minimum_spacing(joint, edition)
         yield details.maximum_spacing(joint, edition, self.inputs.bare_weathering)

@@ -297,7 +297,8 @@ class GussetConnection(Connection):
             rows.append((edge.name if joined.column else "support", units.fraction(edge.L), place, ideal,
                          *(units.ceil_figures(value) for value in (V, N, M))))
         heads = ("Edge", "length, in", "centroid, in", "without moment, in", "shear, kip", "normal, kip", "moment, kip·in")
-        caption = f"Forces that the gusset brings at a load of the brace of {units.ceil_figures(joined.P)} kip; centroids from the corner."
+        caption = (f"Forces that the gusset brings at a load of the brace of "
+                   f"{units.amount(joined.P, 'kip', self.basis.units_system, units.ceil_figures)}; centroids from the corner.")
         remark = "Beam, column and the joint between them are designed for these forces by others." if joined.column else ""
         return (Table("Forces on the edges", heads, tuple(rows), caption, remark),)
 

@@ -5,7 +5,7 @@ from math import cos, sin, tan
 from ...figures import style
 from ...figures.drafting import Drawing, broken, grouped
 from ...figures.section import HEAD
-from ...units import ceil_figures, fraction, ratio_text
+from ...units import ceil_figures, force, fraction, ratio_text
 
 TALLEST, WIDEST, LARGEST = 3.5, 4.4, 0.42
 """Height and width of the drawn part on paper [in], and the scale beyond which a small hanger looks coarse."""
@@ -30,6 +30,10 @@ def _member(h):
     middle = (min(ys) + max(ys)) / 2
     end = h.lower.member.end.x0 - length
     return last - end, foot, -middle, part.width - middle
+
+
+def _size(size):
+    return size.name if size.metric else f"{size.name} in"
 
 
 def _rows(h):
@@ -80,7 +84,7 @@ def elevation(c):
     h, governs = c.hanger, c.governing
     caption = f"Elevation along the beam, to scale; dimensions in inches. Marked: {governs.title}, governs, D/C = {ratio_text(governs.ratio)}."
     alt = (f"{c.subject}: fitting {fraction(h.length, unit=' in')} long with {h.rows} rows of two bolts; the hung member is {c.inputs.joined} to the stem; "
-           f"pull {ceil_figures(h.P)} kip. Marked: {governs.title}.")
+           f"pull {force(h.P, ceil_figures)}. Marked: {governs.title}.")
     return style.Figure(svg, caption, alt, width)
 
 
@@ -123,17 +127,18 @@ def _elevation(c):
     paper.arrow(at(foot + pt(3), 0), at(foot + pt(24), 0))
     px, pz = at(foot + pt(17), 0)
     off = f", {h.psi * 57.29577951308232:.3g}° off the bolts" if h.psi else ""
-    paper.text(px + pt(8), pz, f"P = {ceil_figures(h.P)} kip{off}", style.TYPE, middle=True)
+    paper.text(px + pt(8), pz, f"P = {force(h.P, ceil_figures)}{off}", style.TYPE, middle=True)
     _mark(paper, c, at)
     _elevation_dimensions(paper, c, at, (x0, top))
     items = [(shape.name, (half + 0.9, shape.t_f / 2)), (fit.name, (half - 0.25, -fit.t_f * 0.5)),
              (c.hung.element.member, at((fit.depth / cos(h.psi) + foot) / 2, v1 * 0.55))]
+    product = c.bolt_group.product or c.bolt_group.name
     if h.welds:
         items.append((f"{fraction(h.welds.w_f)} fillets, {fraction(h.welds.length)} long", at(end + 0.45 * h.welds.length, v1)))
     else:
         count, size = h.lower.n_bolts, c.sizes[1]
-        items.append((f"{count} bolts {size.name}", at(end + c.inputs.member_end, max(hole.y for hole in h.lower.pattern) + v0)))
-    items.append((f"{h.n} bolts {c.sizes[0].name} {c.bolt_group.product or c.bolt_group.name}", (_rows(h)[-1], shape.t_f + 0.4 * h.bolts.d)))
+        items.append((f"{count} bolts {_size(size)} {product}-{c.inputs.lower_threads}", at(end + c.inputs.member_end, max(hole.y for hole in h.lower.pattern) + v0)))
+    items.append((f"{h.n} bolts {_size(c.sizes[0])} {product}-{c.inputs.threads}", (_rows(h)[-1], shape.t_f + 0.4 * h.bolts.d)))
     _labels(paper, items, x1 + pt(12), z0, top - pt(6))
     return figure
 
@@ -270,7 +275,7 @@ def _section(c):
         paper.across([-broad[0], broad[0]], level + pt(17), [broad[1]] * 2)
     paper.up([-fit.t_f, 0.0, shape.t_f], -wide - pt(12), [-fit.width / 2, -min(fit.width, shape.b_f) / 2, -shape.b_f / 2])
     items = [(shape.name, (shape.b_f / 2 - 0.2, shape.t_f / 2)), (fit.name, (fit.width / 2 - 0.2, -fit.t_f / 2)), (part.member, tip),
-             (f"{c.sizes[0].name} bolts, gage {fraction(h.g)}", (h.g / 2 + 0.3 * flats, shape.t_f + head / 2))]
+             (f"{_size(c.sizes[0])} bolts, gage {fraction(h.g)}", (h.g / 2 + 0.3 * flats, shape.t_f + head / 2))]
     _labels(paper, items, wide + pt(10), low, top - pt(4))
     return figure
 

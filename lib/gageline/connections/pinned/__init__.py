@@ -140,10 +140,10 @@ class PinnedConnection(Connection):
             id = "pin shear rupture" if given.pin_shear == "yielding" else "pin shear yielding"
             yield not_applicable(id, f"Pin, {id[4:]}", "pin", "J4.2, Table J3.2", f"set aside by the engineer: {given.pin_shear_basis}")
         if C <= 0:
-            yield not_applicable("compression", "Member, compression", "member", "E", "no combination gives compression")
+            yield not_applicable("compression", "Member, compression", "member", "Chapter E", "no combination gives compression")
         else:
-            yield not_applicable("compression", "Member, compression", "member", "E",
-                                 f"by others: {units.ceil_figures(C)} kip; pin and bearing are checked for it here")
+            yield not_applicable("compression", "Member, compression", "member", "Chapter E",
+                                 f"by others: {units.force(C, units.ceil_figures)}; pin and bearing are checked for it here")
         if self.eyebar:
             yield from pin_plate.eyebar_rules(joint.member, d)
         else:

@@ -7,7 +7,7 @@ from ...check import worst_first
 from ...figures import style
 from ...figures.drafting import Drawing, broken
 from ...provisions import pin_plates, pins
-from ...units import ceil_figures, drawn_in_si, fraction, printed, ratio_text
+from ...units import ceil_figures, drawn_in_si, force, fraction, printed, ratio_text
 from .. import pin_plate
 
 TALLEST, LARGEST = 3.0, 0.5  # [in] of an elevation on paper; scale
@@ -75,8 +75,8 @@ def _elevation_canvas(connection, check):
     back = r + support.a
     reach = 0.75 * tall
     left, right = -max(back + 0.45 * tall, reach), max(end + 0.3 * tall, reach)
-    force = f"{SIGN[connection.basis.method]} = {ceil_figures(connection.demand.required_tension)} kip"
-    margin = {"left": style.text_width(force, style.TYPE) + 16, "right": 66, "above": 34, "below": 52}
+    pull = f"{SIGN[connection.basis.method]} = {force(connection.demand.required_tension, ceil_figures)}"
+    margin = {"left": style.text_width(pull, style.TYPE) + 16, "right": 66, "above": 34, "below": 52}
     wide, high = (margin["left"] + margin["right"]) / 72, (margin["above"] + margin["below"]) / 72
     scale = min((style.TEXT_WIDTH - wide) / (right - left), (TALLEST - high) / tall, LARGEST)
     width, height = (right - left) * scale + wide, tall * scale + high
@@ -101,7 +101,7 @@ def _elevation_canvas(connection, check):
     _dimensions(paper, connection, end, back, right, tall)
     tail = left - 7 * pt
     paper.arrow((tail, 0), (tail - 40 * pt, 0))
-    paper.text(tail - 22 * pt, 5 * pt, force, ha="center")
+    paper.text(tail - 22 * pt, 5 * pt, pull, ha="center")
     _labels(paper, connection, front_is_member, left, right, tall)
     return figure
 
@@ -266,7 +266,7 @@ def section(connection):
     pin, P = connection.joint.pin, connection.demand.required_tension
     arm = pins.pin_arm.bare(pin.t_outer, pin.gap, pin.t_inner)
     most = ceil_figures(moment(pin, P, 0.0))
-    load = f"{SIGN[connection.basis.method]} = {ceil_figures(P)} kip"
+    load = f"{SIGN[connection.basis.method]} = {force(P, ceil_figures)}"
     caption = (f"Section along the pin, to scale; right, its bending moment under {load}: half of the load on an arm of {arm:.4g} in, "
                f"{most} kip·in. The darker ply is the member.")
     alt = (f"Section along a pin of {fraction(pin.d, unit=' in')} through two outer plies of {fraction(pin.t_outer, unit=' in')} and an inner ply of "

@@ -152,7 +152,7 @@ class RodConnection(Connection):
             return found
         other = worked(by_body if on_stress_area else by_stress_area).nominal
         said = "0.75 Fu on the body area, the customary value, is" if on_stress_area else "360-22 permits Fu on the tensile stress area instead:"
-        return found._replace(notes=(f"{said} {units.floor_figures(other)} kip, nominal.",))
+        return found._replace(notes=(f"{said} {units.force(other, units.floor_figures)}, nominal.",))
 
     def _checks(self):
         T, method = self.demand.required_tension, self.basis.method
@@ -162,7 +162,7 @@ class RodConnection(Connection):
         for end in ENDS:
             if not self.lug(end):
                 yield from nut_reasons(getattr(self.rod, end))
-        yield not_applicable("compression", "Rod, compression", "rod", "E", "no combination gives compression")
+        yield not_applicable("compression", "Rod, compression", "rod", "Chapter E", "no combination gives compression")
         for end in ENDS:
             if self.lug(end):
                 yield from lug_rules(getattr(self.rod, end), self.basis.edition)
@@ -193,7 +193,7 @@ class RodConnection(Connection):
             return not_applicable(id, title, "rod", clause, f"no limit is given; under {where} the rod stretches by {Delta:.3f} in", kind="advice")
         limit = self.inputs.elongation_limit
         return pin_plate.limit(id, title, "rod", clause, limit, Delta, do.steps, at_most=True, kind="advice",
-                               notes=(f"Elongation of the rod's body under {where}, {units.ceil_figures(P_s)} kip; attachments not counted.",))
+                               notes=(f"Elongation of the rod's body under {where}, {units.force(P_s, units.ceil_figures)}; attachments not counted.",))
 
     def fatigue_details(self, by_id):
         """Return the details that live load may crack: the thread, and lugs at their pin and at their welds."""

@@ -5,7 +5,7 @@ from itertools import pairwise
 
 from ...figures import style
 from ...figures.drafting import Drawing, broken
-from ...units import ceil_figures, drawn_in_si, fraction, printed, ratio_text
+from ...units import ceil_figures, drawn_in_si, force, fraction, printed, ratio_text
 from .attachments import Nut
 from .inputs import ENDS
 
@@ -173,7 +173,7 @@ def _elevation_canvas(connection, check):
     scale = min(*((cell - margins[0] / 72) / (2 * end.half) for end in ends), *((TALLEST - margins[1] / 72) / end.height for end in ends), LARGEST)
     height = max(end.height for end in ends) * scale + margins[1] / 72
     figure = style.canvas(style.TEXT_WIDTH, height)
-    sign = f"{SIGN[connection.basis.method]} = {ceil_figures(connection.demand.required_tension)} kip"
+    sign = f"{SIGN[connection.basis.method]} = {force(connection.demand.required_tension, ceil_figures)}"
     for k, end in enumerate(ends):
         paper = _paper(figure, (k * (cell + GAP), 0, cell, height), end, scale)
         pt = paper.pt

@@ -19,7 +19,7 @@ def reinforcement(joint, T, nominal, state, method):
     available = _available(nominal, state, method)
     if available >= T * (1 - 1e-12):
         return []
-    said = f"The net section falls short by {units.ceil_figures(T - available)} kip. "
+    said = f"The net section falls short by {units.force(T - available, units.ceil_figures)}. "
     found = lightest_reinforcement(joint, T, method)
     if found is None:
         return [said + "No two flat plates that fit on the tube would do; lengthen the welds or take a heavier tube."]

@@ -8,7 +8,7 @@ from math import cos, pi, sin
 
 from ...figures import style
 from ...figures.drafting import Drawing, broken
-from ...units import ceil_figures, drawn_in_si, fraction, ratio_text
+from ...units import ceil_figures, drawn_in_si, force, fraction, ratio_text
 
 TALLEST, LARGEST = 3.1, 0.5
 """Height of a drawing on paper and largest scale. [in]"""
@@ -194,9 +194,9 @@ def _labels(paper, seen, c, force):
     paper.text(start, base, joint.tube.name)
     paper.line([(max(start + pt(16), seen.left + pt(8)), base + pt(8)), (seen.left + pt(12), -seen.half)], style.HAIR, z=4.6)
     paper.text(stop, base, plate, ha="right")
-    x = (seen.l + seen.right) / 2
-    paper.line([(min(x, stop - pt(12)), base + pt(8)), (x, -seen.shown)], style.HAIR, z=4.6)
     wide = [pt(style.text_width(text, style.TYPE)) for text in (joint.tube.name, weld, plate)]
+    x = min(stop - wide[2] / 2, seen.right - pt(6))
+    paper.line([(x, base + pt(8)), (x, -seen.shown)], style.HAIR, z=4.6)
     middle = min(max(0.45 * seen.l, start + wide[0] + pt(12) + wide[1] / 2), stop - wide[2] - pt(12) - wide[1] / 2)
     paper.text(middle, base, weld, ha="center")
     edge = seen.half if seen.concentric else seen.shown
@@ -205,8 +205,8 @@ def _labels(paper, seen, c, force):
 
 def _force(c):
     sign, demand = "Pᵤ" if c.basis.method == "LRFD" else "Pₐ", c.demand
-    lines = [f"{sign} = {ceil_figures(demand.required_tension)} kip"]
-    return [*lines, f"(−{ceil_figures(demand.required_compression)} kip)"] if demand.required_compression > 0 else lines
+    lines = [f"{sign} = {force(demand.required_tension, ceil_figures)}"]
+    return [*lines, f"(−{force(demand.required_compression, ceil_figures)})"] if demand.required_compression > 0 else lines
 
 
 WHERE = {

@@ -68,8 +68,8 @@ class Plate:
     F_u: float
 
     @property
-    def bolted(self):
-        """Its bolt holes: none."""
+    def strip(self):
+        """Its holes: none."""
         return ()
 
 

@@ -9,7 +9,7 @@ from ...figures.drafting import Drawing, broken, grouped
 from ...figures.elevation import bolt_text
 from ...figures.elevation import elevation as joint_elevation
 from ...geometry import lines_of
-from ...units import ceil_figures, fraction
+from ...units import ceil_figures, force, fraction
 
 TALLEST, LARGEST = 3.0, 0.3  # [in] of the whole splice on paper; scale beyond which a small one looks coarse
 WIDEST, SECTION_TALLEST, SECTION_LARGEST = 3.6, 2.7, 0.4  # [in], [in], scale of the section
@@ -131,7 +131,7 @@ def _annotate(paper, connection, x1, heights, depth):
     for side in (-1, 1):
         paper.arrow((side * (x1 + pt(6)), depth / 2), (side * (x1 + pt(40)), depth / 2))
     paper.text(-x1 - pt(24), depth / 2 + pt(6), f"{sign} =", ha="center")
-    paper.text(-x1 - pt(24), depth / 2 - pt(13), f"{ceil_figures(connection.demand.required_tension)} kip", ha="center")
+    paper.text(-x1 - pt(24), depth / 2 - pt(13), f"{force(connection.demand.required_tension, ceil_figures)}", ha="center")
     base = heights[0] - pt(26)
     texts = [(-x1, "left", connection.element.member, (-x1 + pt(14), 0.0))]
     for group, place in zip(splice.groups, ((0.0, "center"), (x1, "right")) if len(splice.groups) == 2 else ((x1, "right"),)):

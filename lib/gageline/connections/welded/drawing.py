@@ -7,7 +7,7 @@ from ...figures import style
 from ...figures.drafting import Drawing, broken
 from ...figures.scene import outline
 from ...geometry import Whitmore
-from ...units import ceil_figures, fraction, ratio_text
+from ...units import ceil_figures, force, fraction, ratio_text
 
 TALLEST, LARGEST = 3.0, 0.42  # [in] of an elevation on paper; scale beyond which a small joint looks coarse
 INDENT = 40  # [pt] of the first weld symbol
@@ -237,9 +237,9 @@ def _annotate(paper, seen, connection, force):
 
 def _force(connection):
     sign = "Pᵤ" if connection.basis.method == "LRFD" else "Pₐ"
-    lines = [f"{sign} = {ceil_figures(connection.demand.required_tension)} kip"]
+    lines = [f"{sign} = {force(connection.demand.required_tension, ceil_figures)}"]
     if connection.demand.required_compression > 0:
-        lines.append(f"(−{ceil_figures(connection.demand.required_compression)} kip)")
+        lines.append(f"(−{force(connection.demand.required_compression, ceil_figures)})")
     return lines
 
 

@@ -27,8 +27,8 @@ class Part:
     width: float
 
     @property
-    def bolted(self):
-        """Holes that hold a bolt: none."""
+    def strip(self):
+        """Its holes: none."""
         return ()
 
 
