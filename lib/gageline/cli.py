@@ -193,7 +193,8 @@ def _print_summary(connection):
 
     system = connection.basis.units_system
     table = Table("check", "clause", "required", "available", "D/C", "", box=None, pad_edge=False)
-    for each in check.worst_first(connection.checks):
+    # Strengths first: what governs stands on top, limits of detailing and advice below.
+    for each in sorted(check.worst_first(connection.checks), key=lambda each: (each.kind != "strength")):
         table.add_row(each.title, each.clause, presenting.required(each, system), presenting.available(each, system), presenting.ratio(each),
                       "OK" if each.ok else "see note" if each.kind == "advice" else "N.G.", style="bold" if each is connection.governing else None)
     for each in connection.checks:

@@ -60,7 +60,7 @@ def demonstration(folder):
     try:
         target.mkdir(parents=True, exist_ok=True)
         for path in source.iterdir():
-            if path.suffix in (".ipynb", ".toml") and not (target / path.name).exists():
+            if path.suffix in (".ipynb", ".toml", ".csv") and not (target / path.name).exists():
                 shutil.copyfile(path, target / path.name)
     except OSError as error:
         raise InputError(f"{target} cannot be written: {(error.strerror or str(error)).lower()}") from None

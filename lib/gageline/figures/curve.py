@@ -266,7 +266,7 @@ def permissible_canvas(connection, region):
     kip, times = shown_as("kip", connection.basis.units_system)
     dead, live = times * service.get("D", 0.0), times * service.get("L", 0.0)
     region = replace(region, x=times * region.x, y=times * region.y)
-    size, left, bottom, right, top = (4.2, 2.3), 0.56, 0.46, 0.2, 0.14
+    size, left, bottom, right, top = (4.6, 2.3), 0.56, 0.46, 0.7, 0.14
     figure = style.canvas(*size)
     wide, tall = size[0] - left - right, size[1] - bottom - top
     axes = figure.add_axes((left / size[0], bottom / size[1], wide / size[0], tall / size[1]))
