@@ -104,8 +104,9 @@ class Calc:
         with units.lengths_in(system):
             items = [("assumption", text if basis == "engineer" else units.told(text, system), basis, True)
                      for text, basis in self.connection.assumptions()]
-            items += [("open item", text if text in asked else units.told(text, system), "engineer" if text in asked else "a check of this calculation",
-                       not text.endswith(presenting.FAILED)) for text in self.connection.open_items()]
+            items += [("open item", text if text in asked else units.told(text, system),
+                       "engineer" if text in asked else "a check of this calculation", not text.endswith(presenting.FAILED))
+                      for text in self.connection.open_items()]
         items += [("open item", f"Inputs without a source: {', '.join(unsourced)}.", "inputs", False)] if unsourced else []
         items += [("open item", f"Inputs overridden at the run: {', '.join(overridden)}.", "inputs", False)] if overridden else []
         counts = {"assumption": 0, "open item": 0}
@@ -223,8 +224,9 @@ class Calc:
 
     def closing(self):
         """Return the review, notation, references, cautions and the identification of the program."""
+        rows = [(name, units.told(said, self.project.units)) for name, said in identity.rows(self.connection.family)]
         return Part([*reviewing.review(self), *presenting.closing(self.connection), sheet.heading(text="Program identification"),
-                     sheet.identification(rows=[(name, units.told(said, self.project.units)) for name, said in identity.rows(self.connection.family)])])
+                     sheet.identification(rows=rows)])
 
     def _repr_html_(self):
         governs = self.connection.governing

@@ -56,6 +56,8 @@ REFERENCES = {
     "360-16": "ANSI/AISC 360-16, Specification for Structural Steel Buildings, American Institute of Steel Construction, 2016",
     "7-22": "ASCE/SEI 7-22, Minimum Design Loads and Associated Criteria for Buildings and Other Structures, 2022",
     "7-16": "ASCE/SEI 7-16, Minimum Design Loads and Associated Criteria for Buildings and Other Structures, 2016",
+    "AISC 341 360-22": "ANSI/AISC 341-22, Seismic Provisions for Structural Steel Buildings, 2022, from memory; to be confirmed",
+    "AISC 341 360-16": "ANSI/AISC 341-22, Seismic Provisions for Structural Steel Buildings, 2022, from memory; to be confirmed",
     "RCSC 360-22": "RCSC Specification for Structural Joints Using High-Strength Bolts, 2020",
     "RCSC 360-16": "RCSC Specification for Structural Joints Using High-Strength Bolts, 2014",
     "AWS D1.1 360-22": "AWS D1.1/D1.1M:2020, Structural Welding Code—Steel, American Welding Society",

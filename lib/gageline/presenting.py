@@ -1,5 +1,6 @@
 """The parts of a report as blocks of the sheet: tables of summary, inputs, loads and bolts, and the checks line by line."""
 
+import functools
 import re
 from dataclasses import replace
 
@@ -59,12 +60,16 @@ def runs_of(text):
 
 def required(each, system="US"):
     """Return what a check requires, never rounded down."""
-    return units.amount(each.demand, each.unit, system, units.ceil_figures) if each.kind == "strength" else _bound(each.demand, each.unit, system)
+    if each.kind != "strength":
+        return _bound(each.demand, each.unit, system)
+    return units.amount(each.demand, each.unit, system, units.ceil_figures)
 
 
 def available(each, system="US"):
     """Return what is available, never rounded up."""
-    return units.amount(each.available, each.unit, system, units.floor_figures) if each.kind == "strength" else _bound(each.available, each.unit, system)
+    if each.kind != "strength":
+        return _bound(each.available, each.unit, system)
+    return units.amount(each.available, each.unit, system, units.floor_figures)
 
 
 def figure(drawn, system="US", dimensioned=False):
@@ -75,7 +80,8 @@ def figure(drawn, system="US", dimensioned=False):
     return sheet.figure(svg=drawn.svg, caption=units.told(caption, system), alt=units.told(drawn.alt, system), width=drawn.width)
 
 
-UNITS = {"US": "kip, inch, ksi", "SI": "kN, mm, MPa (1 MPa = 1 N/mm²; 1 kN = 1000 N)", "dual": "kip, inch, ksi; results also in kN, mm, MPa in brackets"}
+UNITS = {"US": "kip, inch, ksi", "SI": "kN, mm, MPa (1 MPa = 1 N/mm²; 1 kN = 1000 N)",
+         "dual": "kip, inch, ksi; results also in kN, mm, MPa in brackets"}
 """Units as the cover names them."""
 
 
@@ -120,7 +126,8 @@ def summary(connection):
     limits = [each for each in connection.checks if each.kind != "strength"]
     failed = [each for each in limits if each.ok is False]
     said = f"All limits listed under “{connection.parts['detailing']}” are met." if not failed else \
-        "Not met: " + "; ".join(f"{each.title} ({_limit(each, system)}, provided {_provided(each, system)}{', a recommendation' if each.kind == 'advice' else ''})"
+        "Not met: " + "; ".join(f"{each.title} ({_limit(each, system)}, provided {_provided(each, system)}"
+                                f"{', a recommendation' if each.kind == 'advice' else ''})"
                                 for each in failed) + "."
     apart = not_applicable([each for each in connection.checks if each.kind == "strength"])
     return [*out, *apart, sheet.prose(runs=said)]
@@ -183,6 +190,7 @@ def loads(connection):
     demand, basis, system = connection.demand, connection.basis, connection.basis.units_system
     unit, factor = units.shown_as("kip", system)
     sign = "P_u" if basis.method == "LRFD" else "P_a"
+    up = functools.partial(units.ceil_figures, figures=4)
     service, (impact, expected) = getattr(demand, "service", demand), connection.load_steps()
     out = [sheet.heading(text="Loads and required strength"), *steps(impact, basis.edition, system)]
     if isinstance(service, Demands):
@@ -196,14 +204,15 @@ def loads(connection):
         said = " ".join(row.combination.text for row in service.rows)
         columns = [{"head": "Clause"}, {"head": "Combination"}, {"head": f"With numbers, {unit}"}, {"head": f"Total, {unit}", "align": "right"}]
         out.append(sheet.table(columns=columns, rows=rows, caption=f"Combinations of {basis.loads_standard}, {basis.method}; tension positive, "
-                                                                   "the governing ones in bold" + ("; W′: wind in the opposite sense." if "W_opp" in said else ".")))
+                                                                   "the governing ones in bold"
+                                                                   + ("; W′: wind in the opposite sense." if "W_opp" in said else ".")))
     else:
         out.append(sheet.prose(runs=f"The required strength is given at {demand.level} level."))
     out += steps(expected, basis.edition, system)
     out.append(sheet.prose(runs=[
-        "Required tension ", {"math": f"{sign} = {value_latex(units.ceil_figures(demand.required_tension * factor, 4), unit)}"
-                                        + in_brackets(demand.required_tension, "kip", system, lambda value: units.ceil_figures(value, 4)), "alt": "required tension"},
-        *([f"; required compression {units.amount(demand.required_compression, 'kip', system, lambda value: units.ceil_figures(value, 4))}"] if demand.required_compression > 0 else
+        "Required tension ", {"math": f"{sign} = {value_latex(up(demand.required_tension * factor), unit)}"
+                                        + in_brackets(demand.required_tension, "kip", system, up), "alt": "required tension"},
+        *([f"; required compression {units.amount(demand.required_compression, 'kip', system, up)}"] if demand.required_compression > 0 else
           ["; no combination gives compression" if isinstance(demand, Demands) else "; no compression is given"]), "."]))
     return out
 
@@ -379,8 +388,8 @@ def permissible(connection):
                                limit if found.value is not None else units.told(found.reason, system)]})
     columns = [{"head": "Load"}, {"head": "As given", "align": "right"}, {"head": "Permissible", "align": "right"}, {"head": "Limited by"}]
     return [sheet.heading(text="Permissible loads"),
-            sheet.prose(runs=f"The connection permits a required tension of {units.amount(capacity, 'kip', system, units.floor_figures)} ({basis.method}). "
-                             "Largest value of each load with the others as given:"),
+            sheet.prose(runs=f"The connection permits a required tension of {units.amount(capacity, 'kip', system, units.floor_figures)} "
+                             f"({basis.method}). Largest value of each load with the others as given:"),
             sheet.table(columns=columns, rows=rows)]
 
 
@@ -398,7 +407,8 @@ def _works(connection):
     """Return the works beside specification and loads that a calculation goes by: for bolts, for welds, for what the Manual alone gives."""
     built = " ".join(word for row in connection.designed() for word in row).lower()
     clauses = " ".join(each.clause for each in connection.checks if each.applies)
-    asked = {"RCSC": re.search(r"\bbolts?\b", built), "AWS D1.1": re.search(r"weld|fillet", built), "Manual": "Manual" in clauses}
+    asked = {"RCSC": re.search(r"\bbolts?\b", built), "AWS D1.1": re.search(r"weld|fillet", built), "Manual": "Manual" in clauses,
+             "AISC 341": connection.inputs.seismic_system}
     return [name for name, needed in asked.items() if needed]
 
 

@@ -132,7 +132,8 @@ def _sentence(connection, curve):
     enough = np.flatnonzero(envelope >= T * (1 - 1e-12))
     if not len(enough):
         best = int(np.argmax(envelope))
-        return (f"No length up to {sweep.describe(len(envelope) - 1)} carries {said}: the most is {units.force(envelope[best], units.floor_figures)}, "
+        return (f"No length up to {sweep.describe(len(envelope) - 1)} carries {said}: "
+                f"the most is {units.force(envelope[best], units.floor_figures)}, "
                 f"limited by: {limit(best)}.")
     i = int(enough[0])
     text = (f"The shortest connection that carries {said} in every limit state is {sweep.describe(i)}; "

@@ -259,6 +259,15 @@ def fraction(value, denominator=16, unit=""):
     return ("−" if value < 0 else "") + text + unit
 
 
+def length(value):
+    """Return inches as the trade writes them with their unit, or millimetres within ``lengths_in("SI")``.
+
+    >>> length(1.5)
+    '1½ in'
+    """
+    return fraction(value, unit=" in")
+
+
 def feet(value):
     """Return inches as feet and inches.
 

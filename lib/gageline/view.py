@@ -63,7 +63,8 @@ def _table(block):
 
 def _equation(block):
     rows = " \\\\ ".join(line["lhs"] + " &= " + r" \\ &= ".join([*line["rows"][:-2], " = ".join(line["rows"][-2:])]) for line in block["lines"])
-    return (f'<div style="display:flex;justify-content:space-between;align-items:center;margin:.45em 0" role="math" aria-label="{html.escape(block["alt"], quote=True)}"><div>\\(\\begin{{aligned}}{rows}\\end{{aligned}}\\)</div>'
+    return (f'<div style="display:flex;justify-content:space-between;align-items:center;margin:.45em 0" role="math" '
+            f'aria-label="{html.escape(block["alt"], quote=True)}"><div>\\(\\begin{{aligned}}{rows}\\end{{aligned}}\\)</div>'
             f'<div{_SMALL}>{html.escape(block["clause"])}</div></div>')
 
 

@@ -4,6 +4,7 @@ import pytest
 from helpers import ANGLE, PLATE, bolted, checks, remarks, value_of
 
 from gageline import presenting
+from gageline.connections.hanger import HangerConnection
 from gageline.connections.pinned import PinnedConnection
 from gageline.connections.rod import RodConnection
 from gageline.connections.slotted import SlottedConnection
@@ -24,6 +25,10 @@ TUBE = {"mark": "V", "member": "HSS6x4x3/8", "member_grade": "A500-C", "side_alo
         "plate_grade": "A572-50", "weld_length": "16 in", "weld_leg": "1/4 in", "gusset_support": "compact corner", "gusset_length": "6 in",
         "tension": "100 kip", "demand_level": "LRFD"}
 SLIP = {"installation": "slip-critical", "slip_class": "A"}
+HANGER = {"mark": "H", "tension": "50 kip", "demand_level": "LRFD", "beam": "W21x57", "beam_grade": "A992", "beam_end": "10 ft", "fitting": "WT6x17.5",
+          "fitting_grade": "A992", "rows": 2, "pitch": "5 in", "gage": "3-1/2 in", "fitting_end": "2 in", "bolt": "3/4", "bolt_grade": "A325",
+          "member": "2L3x3x5/16", "member_grade": "A572-50", "joined": "welded", "weld": "3/16 in", "weld_length": "4 in",
+          "installation": "pretensioned"}
 BOTH = pytest.mark.parametrize("edition", ["360-22", "360-16"])
 
 
@@ -102,6 +107,28 @@ class TestFatigue:
         found = checks(RodConnection.of(**ROD, fatigue_range="5 kip", fatigue_cycles=2e6))["fatigue thread"]
 
         assert (found.demand, found.available, found.ok) == (pytest.approx(8.255, abs=0.002), 7.0, False)
+
+    def test_lug_of_a_rod_by_hand(self):
+        """Lug 3/4 x 4: 5 kip on 3.00 in² is 1.67 ksi; R_FIL = (0.06 + 0.72/3) / 0.75^0.167 = 0.3148, times 13.06 ksi; 2 throats of 0.1768 x 4."""
+        lug = {"upper": "welded lug", "upper_thickness": "3/4 in", "upper_width": "4 in", "upper_edge": "2 in", "upper_pin": "1-1/4 in",
+               "upper_pin_grade": "A36", "upper_arm": "1/2 in", "upper_gap": "1/16 in", "upper_weld": "1/4 in"}
+        made = checks(RodConnection.of(**ROD | lug, fatigue_range="5 kip", fatigue_cycles=2e6))
+
+        assert (made["fatigue upper weld"].demand, made["fatigue upper weld"].available) == (pytest.approx(1.6667, abs=1e-4), pytest.approx(4.111, abs=2e-3))
+        assert made["fatigue upper throat"].demand == pytest.approx(5 / 1.4142, rel=1e-4)
+        assert made["fatigue upper pin"].demand == pytest.approx(5 / (0.75 * (4 - 1.28125)))
+
+    def test_bolts_of_a_hanger_by_hand(self):
+        """Four 3/4 in bolts, 0.3345 in² each; a fifth of 30 kip, raised by the prying of the required load; category G."""
+        found = checks(HangerConnection.of(**HANGER, **CYCLIC))
+        worst = max((found[f"{side} prying"] for side in ("fitting", "beam")), key=lambda each: value_of(each, "bolt_force"))
+        prying = value_of(worst, "bolt_force") / 12.5
+
+        assert prying >= 1
+        assert found["fatigue bolts"].demand == pytest.approx(0.2 * 30 * prying / (4 * 0.3345), rel=1e-3)
+        assert found["fatigue bolts"].available == pytest.approx(9.25, abs=0.005)
+        with pytest.raises(ScopeError, match="snug"):
+            assert HangerConnection.of(**HANGER | CYCLIC | {"installation": "snug"}).checks
 
     def test_net_section_of_a_pin_plate_by_hand(self):
         """(7 - 2-1/32) 1 = 4.969 in²; 30 kip: 6.04 ksi, category E."""

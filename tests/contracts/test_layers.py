@@ -21,8 +21,8 @@ LEVEL = {
     "editions": 5,
     "connections": 6,
     "study": 7, "families": 7,
-    "figures": 8, "sheet": 8, "cells": 8, "project": 8, "search": 8,
-    "identity": 9, "view": 9, "presenting": 9, "reviewing": 9,
+    "figures": 8, "sheet": 8, "cells": 8, "project": 8, "search": 8, "margins": 8,
+    "searching": 9, "identity": 9, "view": 9, "presenting": 9, "reviewing": 9,
     "calc": 10,
     "running": 11,
     "starting": 12, "archive": 12, "schedule": 12, "terminal": 12,
@@ -54,7 +54,7 @@ OUTSIDE = {
     "nbclient": {"running", "sheet"},
     "nbformat": {"sheet", "running", "starting", "cells", "archive"},
     "papermill": set(),
-    "numpy": {"formula", "check", "geometry", "connections", "study", "search", "figures", "calc", "loads", "presenting"},
+    "numpy": {"formula", "check", "geometry", "connections", "study", "search", "searching", "figures", "calc", "loads", "presenting"},
 }
 """Outside library -> parts that may import it."""
 

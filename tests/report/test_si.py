@@ -85,7 +85,8 @@ class TestPublished:
 
         assert 645.16 * area == pytest.approx(printed, abs=0.051)
 
-    @pytest.mark.parametrize(("width", "thickness", "plates", "A_n", "gross", "net"), [(300, 25, 1, 5700, 2362, 1924), (220, 14, 2, 2072, 1940, 1399)])
+    @pytest.mark.parametrize(("width", "thickness", "plates", "A_n", "gross", "net"),
+                             [(300, 25, 1, 5700, 2362, 1924), (220, 14, 2, 2072, 1940, 1399)])
     def test_t10_plates_of_a_splice(self, width, thickness, plates, A_n, gross, net):
         """F_y 350, F_u 450 MPa, three holes of 24 mm in line across; printed in kN with 0.90 and 0.75."""
         from gageline.provisions import tension

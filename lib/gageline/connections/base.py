@@ -39,14 +39,15 @@ class CalcInputs(Inputs):
     compression: Force | None = note("required compression, with a given required tension", None, group=_LOADS, ge=0, le=50_000)
     demand_level: Literal["LRFD", "ASD"] | None = note("level of the given demand: LRFD or ASD", None, group=_LOADS)
 
-    fatigue_range: Force | None = note("range of the live load's axial force at service level, both senses together", None, group=_FATIGUE, gt=0, le=50_000)
+    fatigue_range: Force | None = note("range of the live load's axial force at service level, both senses together", None, group=_FATIGUE,
+                                      gt=0, le=50_000)
     fatigue_cycles: Number | None = note("cycles of that range in the design life; up to 20 000 need no check", None, group=_FATIGUE, ge=0, le=1e10)
 
     seismic_system: Literal["SCBF", "OCBF"] | None = note("frame that the brace belongs to: SCBF (special) or OCBF (ordinary)", None, group=_SEISMIC)
     system_cap: Force | None = note("largest force that the system can deliver to the brace", None, group=_SEISMIC, gt=0, le=50_000)
     system_cap_basis: str = note("written basis of system_cap", "", group=_SEISMIC)
-    brace_compression: Force | None = note("expected strength of a special brace in compression (default: that in tension)", None, group=_SEISMIC, gt=0,
-                                           le=50_000)
+    brace_compression: Force | None = note("expected strength of a special brace in compression (default: that in tension)", None, group=_SEISMIC,
+                                          gt=0, le=50_000)
     clear_band: Length | None = note("clear band of the gusset between the brace's end and the line of restraint", None, group=_SEISMIC, gt=0, le=60)
     seismic_basis: str = note("who confirmed the provisions of AISC 341, and how", "", group=_SEISMIC)
 
@@ -158,7 +159,8 @@ class Connection:
         self.demand = inputs.required(self.basis)
         for name, wanted, method in (("fatigue_range", fatigue.asked(inputs), "fatigue_details"), ("seismic_system", inputs.seismic_system, "brace")):
             if wanted and not hasattr(self, method):
-                raise ScopeError(f"{name} is not for this calculation: {self.title.lower()} has no check for it; do that part by hand and remove the input")
+                raise ScopeError(f"{name} is not for this calculation: {self.title.lower()} has no check for it; do that part by hand, "
+                                 "and remove the input")
 
     @classmethod
     def of(cls, *, edition="360-22", method="LRFD", loads="7-22", **inputs):

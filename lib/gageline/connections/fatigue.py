@@ -85,8 +85,8 @@ def _range(given, detail, do, A_SR, by_id):
     else:
         F_SR = do(fatigue.allowable_range, facts.F_1000, category.C_f, n, category.F_TH)
     notes = (detail.note,) if detail.note else ()
-    return Check(f"{ID} {detail.id}", f"{TITLE}, {detail.title[0].lower()}{detail.title[1:]}", detail.part, f"{CLAUSE}, category {category.name}", nominal=F_SR, available=F_SR,
-                 demand=f_SR, unit="ksi", steps=tuple(do.steps), notes=notes, tension=False)
+    return Check(f"{ID} {detail.id}", f"{TITLE}, {detail.title[0].lower()}{detail.title[1:]}", detail.part,
+                 f"{CLAUSE}, category {category.name}", nominal=F_SR, available=F_SR, demand=f_SR, unit="ksi", steps=tuple(do.steps), notes=notes, tension=False)
 
 
 def _peak(c, detail, A_SR):
@@ -95,8 +95,8 @@ def _peak(c, detail, A_SR):
     P_max = P_max if detail.force is None else detail.force(do, P_max)
     f_max = do(fatigue.peak_stress, P_max, A_SR)
     F_max = do(fatigue.peak_limit, detail.F_y)
-    return Check(f"{ID} {detail.id} peak", f"{TITLE}, largest stress, {detail.title[0].lower()}{detail.title[1:]}", detail.part, "Appendix 3.1", nominal=F_max, available=F_max,
-                 demand=f_max, unit="ksi", steps=tuple(do.steps), tension=False)
+    return Check(f"{ID} {detail.id} peak", f"{TITLE}, largest stress, {detail.title[0].lower()}{detail.title[1:]}", detail.part,
+                 "Appendix 3.1", nominal=F_max, available=F_max, demand=f_max, unit="ksi", steps=tuple(do.steps), tension=False)
 
 
 def value_in(check, symbol):
@@ -119,7 +119,8 @@ def refuse_snug(installation, name="installation"):
     ScopeError
     """
     if installation == "snug":
-        raise ScopeError(f"{name} = 'snug': joints under more than 20 000 cycles of live load are slip-critical or pretensioned (Appendix 3, Table A-3.1)")
+        raise ScopeError(f"{name} = 'snug': joints under more than 20 000 cycles of live load are slip-critical or pretensioned "
+                         "(Appendix 3, Table A-3.1)")
 
 
 def at_bolts(part, title, yielding, rupture, installation, F_y, force=None, note=""):
@@ -161,8 +162,8 @@ def throats(part, title, lines):
 
 def weld_ends(part, title, t, area, F_y, note=""):
     """Return the detail of an element of thickness t [in] at the ends of longitudinal fillets, on its effective area, which is the safe choice."""
-    return Detail(f"{part} weld ends", f"{title}, ends of the longitudinal welds", part, facts.longitudinal(t).name, "Table A-3.1, 4.1", area, F_y=F_y,
-                  note=note)
+    return Detail(f"{part} weld ends", f"{title}, ends of the longitudinal welds", part, facts.longitudinal(t).name, "Table A-3.1, 4.1", area,
+                  F_y=F_y, note=note)
 
 
 def thread(do, d, tpi, metric, n):

@@ -90,7 +90,8 @@ class Inputs(BaseModel):
 
     def shown(self, system="US"):
         """Return (group, name, meaning, value as text in a system of units, whether given) for every input, in order of definition."""
-        return [(field.json_schema_extra["group"], name, field.description, display(getattr(self, name), field, system), name in self.model_fields_set)
+        return [(field.json_schema_extra["group"], name, field.description, display(getattr(self, name), field, system),
+                 name in self.model_fields_set)
                 for name, field in type(self).model_fields.items()]
 
 
@@ -102,8 +103,8 @@ def display(value, field, system="US"):
     if system == "dual" and unit in ("in", "kip") and value != ():
         return f"{display(value, field)} ({display(value, field, 'SI')})"
     if system == "SI" and unit == "in":
-        points = value if isinstance(value, tuple) else (value,)
-        return "; ".join(", ".join(units.printed(v * 25.4) for v in (p if isinstance(p, tuple) else (p,))) for p in points) + " mm" if points else "none"
+        points = [p if isinstance(p, tuple) else (p,) for p in (value if isinstance(value, tuple) else (value,))]
+        return "; ".join(", ".join(units.printed(v * 25.4) for v in point) for point in points) + " mm" if points else "none"
     if unit == "rad":
         return f"{value * 57.29577951308232:.4g}°"
     if unit == "in":

@@ -41,7 +41,8 @@ def fraction(given):
     if i in KNOWN and not given.impact_basis:
         return i, KNOWN[i]
     if len(given.impact_basis.strip()) < 10:
-        raise InputError(f"impact = {given.impact!r} is none of ASCE 7 4.6 (20 %, 50 %) nor \"33 % legacy\"; it needs a written basis in impact_basis")
+        raise InputError(f"impact = {given.impact!r} is none of ASCE 7 4.6 (20 %, 50 %) nor \"33 % legacy\"; "
+                         "it needs a written basis in impact_basis")
     return i, given.impact_basis
 
 

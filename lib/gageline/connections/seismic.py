@@ -87,11 +87,13 @@ def _refuse(given):
     if installation is None:
         return
     if installation == "snug":
-        raise ScopeError("installation = 'snug': bolts of a seismic system are pretensioned, faying surfaces class A or better (341 D2.2, from memory)")
+        raise ScopeError("installation = 'snug': bolts of a seismic system are pretensioned, faying surfaces class A or better "
+                         "(341 D2.2, from memory)")
     kinds = (given.member_holes, given.plate_holes)
     for name, kind in zip(("member_holes", "plate_holes"), kinds):
         if kind not in ("STD", "SSL across", "OVS"):
-            raise ScopeError(f"{name} = {kind!r}: bolts of a seismic system have standard holes or short slots across the load (341 D2.2, from memory)")
+            raise ScopeError(f"{name} = {kind!r}: bolts of a seismic system have standard holes or short slots across the load "
+                             "(341 D2.2, from memory)")
         if kind == "OVS" and (installation != "slip-critical" or kinds == ("OVS", "OVS")):
             raise ScopeError(f"{name} = 'OVS': in a seismic system oversized holes are for one ply of a slip-critical joint (341 D2.2, from memory)")
     if not given.deformation_considered:
@@ -118,8 +120,8 @@ def _of_brace(c, each, R_t):
     else:
         do.say("Rupture of the brace against its own expected yielding may count on its expected tensile strength (341 A3.2, from memory).")
         nominal = do(seismic.expected_rupture, R_t, nominal)
-    return strength_check(each.id, each.title, each.part, each.clause, each.limit_state, c.basis.method, nominal, demand, (*steps, *do.steps), each.axial,
-                          path=each.path, notes=notes)
+    return strength_check(each.id, each.title, each.part, each.clause, each.limit_state, c.basis.method, nominal, demand,
+                          (*steps, *do.steps), each.axial, path=each.path, notes=notes)
 
 
 def checks(c, made):
@@ -152,8 +154,8 @@ def checks(c, made):
     else:
         needed = BAND * brace.t_p
         yield Check(id, title, "plate", clause, kind="advice", nominal=needed, available=given.clear_band, demand=needed, unit="in",
-                    notes=("A gusset lets a brace buckle out of its plane where a band of twice its thickness is clear between the brace's end and the line "
-                           "of restraint; an elliptical band of 8 thicknesses is an alternative.",))
+                    notes=("A gusset lets a brace buckle out of its plane where a band of twice its thickness is clear between the brace's end and the "
+                           "line of restraint; an elliptical band of 8 thicknesses is an alternative.",))
 
 
 def notes(c):

@@ -114,7 +114,7 @@ def _not_drawn(axes, rest, x_low, x_high, y_high, kip):
     across, up = (x_high - x_low) / ((SIZE[0] - LEFT - RIGHT) * 72), y_high / ((SIZE[1] - BOTTOM - TOP) * 72)
     lines = (f"{len(rest)} further combination{'s' if len(rest) > 1 else ''},", f"at most {ceil_figures(max(rest))} {kip}, not drawn")
     for k, line in enumerate(lines):
-        axes.text(x_high + 15 * across, (-25 - 8.5 * k) * up, line, fontsize=style.TINY, va="baseline", color=style.SOFT, clip_on=False)
+        axes.text(x_high + 15 * across, (-25 - 9 * k) * up, line, fontsize=style.TINY, va="baseline", color=style.SOFT, clip_on=False)
 
 
 def _limits(curve, demands):
@@ -195,7 +195,8 @@ def _design(axes, connection, curve, demands, limits):
         return
     x, y = float(curve.lengths[at]), float(curve.envelope[at])
     axes.plot([x], [y], "o", color=style.INK, ms=6.5, mfc=style.PAPER, mew=1.6, zorder=6, gid="design")
-    text = f"this design: {curve.sweep.marks[at] + ', ' if curve.sweep.marks else ''}{floor_figures(y)} {shown_as('kip', connection.basis.units_system)[0]}"
+    kip, _ = shown_as("kip", connection.basis.units_system)
+    text = f"this design: {curve.sweep.marks[at] + ', ' if curve.sweep.marks else ''}{floor_figures(y)} {kip}"
     x_low, x_high, y_high = limits
     px = (x_high - x_low) / ((SIZE[0] - LEFT - RIGHT) * 72)
     py = y_high / ((SIZE[1] - BOTTOM - TOP) * 72)
@@ -248,7 +249,8 @@ def capacity_curve(connection, curve):
     at = curve.sweep.design
     here = "" if at is None else f" The design ({curve.sweep.describe(at)}) has {force(float(curve.envelope[at]), floor_figures)}."
     alt = (f"Diagram of {len(curve.strengths)} limit states over lengths of {fraction(float(curve.lengths[0]))} to "
-           f"{fraction(float(curve.lengths[-1]), unit=' in')}; the largest demand is {force(curve.demands[0][1], ceil_figures)}.{here} {curve.sentence}")
+           f"{fraction(float(curve.lengths[-1]), unit=' in')}; the largest demand is {force(curve.demands[0][1], ceil_figures)}.{here} "
+           f"{curve.sentence}")
     return style.Figure(svg, caption, alt, width)
 
 
@@ -341,5 +343,6 @@ def permissible_loads(connection):
                "combination that limits. Dot: this design.")
     dead, live = (connection.inputs.service().get(nature, 0.0) for nature in "DL")
     alt = (f"Region of dead and live load permitted by {capacity}: at most {force(float(region.x[-1]), floor_figures)} of D without L, "
-           f"{force(float(region.y[0]), floor_figures)} of L without D; the design has D = {force(dead, ceil_figures)} and L = {force(live, ceil_figures)}.")
+           f"{force(float(region.y[0]), floor_figures)} of L without D; the design has D = {force(dead, ceil_figures)} "
+           f"and L = {force(live, ceil_figures)}.")
     return style.Figure(svg, caption, alt, width)

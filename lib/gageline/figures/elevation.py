@@ -278,9 +278,15 @@ def _labels(paper, seen, connection, base):
     wide = [pt(style.text_width(text, style.TYPE)) for _, _, text in texts]
     member_x = seen.left + min(wide[0] / 2, pt(14))
     start, stop = seen.left - pt(6), seen.wide[1] + pt(4)
-    for bolts in (bolts, f"{joint.n_bolts} bolt{'s' if joint.n_bolts > 1 else ''}"):
-        wide[1] = pt(style.text_width(bolts, style.TYPE))
-        if fits := start + wide[0] + wide[1] + wide[2] + pt(28) <= stop:
+    edge = paper.axes.get_xlim()[1] - pt(2)
+    if start + wide[0] + pt(12) + wide[2] > edge:  # no room for what is not shown; the section shows it
+        plate = plate.partition(",")[0]
+        wide[2] = pt(style.text_width(plate, style.TYPE))
+    for said in (bolts, f"{joint.n_bolts} bolt{'s' if joint.n_bolts > 1 else ''}"):
+        wide[1] = pt(style.text_width(said, style.TYPE))
+        ends = start + wide[0] + wide[1] + wide[2] + pt(28)
+        if fits := ends <= edge:
+            stop = max(stop, ends)
             break
     centre = min(max(low.x, start + wide[0] + pt(14) + wide[1] / 2), stop - wide[2] - pt(14) - wide[1] / 2)
     paper.text(start, base, texts[0][2])
@@ -290,7 +296,7 @@ def _labels(paper, seen, connection, base):
     paper.text(max(stop, start + wide[0] + pt(12) + wide[2]), base, plate, ha="right")
     paper.line([(plate_x, base + pt(8)), (min(plate_x, seen.right - pt(3)), foot)], style.HAIR, z=4.6)
     if fits:
-        paper.text(centre, base, bolts, ha="center")
+        paper.text(centre, base, said, ha="center")
         r = joint.member.hole.across / 2
         paper.line([(low.x + (0.3 * (centre - low.x) if centre != low.x else 0), base + pt(8)), (low.x, low.y - r - pt(2.5))], style.HAIR, z=4.6)
 
@@ -306,7 +312,11 @@ def _pointed_at(joint):
 
 def bolt_size(connection):
     """Return the size of the bolts, in fractions of an inch or as metric."""
-    return connection.size.name if connection.size.metric else (f"{connection.size.name} in" if drawn_in_si() else fraction(connection.size.d, unit=" in"))
+    size = connection.size
+    if size.metric:
+        return size.name
+    # An inch bolt keeps its name: 22.2 mm would be taken for M22.
+    return f"{size.name} in" if drawn_in_si() else fraction(size.d, unit=" in")
 
 
 def bolt_text(connection):
@@ -362,7 +372,8 @@ def elevation(connection, check=None):
     caption = f"Elevation on the {element.name}{seen_from}, to scale; dimensions in inches."
     given, n, lines = connection.inputs, len(joint.pattern), joint.n_lines
     alt = (f"Elevation of {element.member}, bolted by {n} bolt{'s' if n > 1 else ''} {bolt_size(connection)} in {lines} gage line"
-           f"{'s' if lines > 1 else ''}, length {fraction(joint.length, unit=' in')}, to a plate {fraction(given.plate_thickness, unit=' in')} thick and "
+           f"{'s' if lines > 1 else ''}, length {fraction(joint.length, unit=' in')}, to a plate "
+           f"{fraction(given.plate_thickness, unit=' in')} thick and "
            f"{fraction(given.plate_width, unit=' in')} wide.")
     if check is not None and check.path is not None:
         what, styles = described(check)

@@ -133,7 +133,5 @@ def spread(wanted, apart, low, high):
             start, n = runs.pop()
             before, m = runs.pop()
             first = (before * m + (start - m * apart) * n) / (m + n)
-            runs.append([first, m + n])
-        start, n = runs[-1]
-        runs[-1][0] = max(min(start, high - (n - 1) * apart), low)
+            runs.append([max(min(first, high - (m + n - 1) * apart), low), m + n])
     return [round(start + k * apart, 9) for start, n in runs for k in range(n)]

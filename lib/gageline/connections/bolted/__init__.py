@@ -240,7 +240,8 @@ class BoltedConnection(Connection):
         """Return the details that live load may crack: member and plate at their bolts."""
         given, joint = self.inputs, self.joint
         fatigue.refuse_snug(given.installation)
-        note = "The stress range is axial; bending from the eccentricity of a lap is to be added by hand." if given.plates == 1 and joint.bolts.n_s == 1 else ""
+        lapped = given.plates == 1 and joint.bolts.n_s == 1
+        note = "The stress range is axial; bending from the eccentricity of a lap is to be added by hand." if lapped else ""
         yielding, rupture = ("plate yielding", "plate rupture") if len(joint.pattern) == 1 else ("Whitmore yielding", "Whitmore rupture")
         return (fatigue.at_bolts("member", "Member", "member yielding", "member rupture", given.installation, joint.member.F_y, note=note),
                 fatigue.at_bolts("plate", "Plate", yielding, rupture, given.installation, joint.plate.F_y, note=note))
@@ -271,7 +272,7 @@ class BoltedConnection(Connection):
         if given.eccentricity_basis:
             notes.append((f"Eccentricity of the bolt group accepted by the engineer: {given.eccentricity_basis}", "engineer"))
         if joint.t_filler:
-            notes.append((f"Fillers of {units.fraction(joint.t_filler, unit=' in')} at a shear plane, not developed outside the joint.", "input"))
+            notes.append((f"Fillers of {units.length(joint.t_filler)} at a shear plane, not developed outside the joint.", "input"))
         return [*super().assumptions(), *notes]
 
     def materials_text(self):
@@ -307,7 +308,7 @@ class BoltedConnection(Connection):
             least = grip + facts.bolt_length_addition(self.size) + facts.WASHER
         except LookupError:
             return f"grip {units.printed(grip)} in; length by the supplier"
-        return f"grip {units.printed(grip)} in; {units.fraction(math.ceil(least * 4 - 1e-9) / 4, unit=' in')} with one washer (common practice)"
+        return f"grip {units.printed(grip)} in; {units.length(math.ceil(least * 4 - 1e-9) / 4)} with one washer (common practice)"
 
     @property
     def design(self):
@@ -361,8 +362,8 @@ class BoltedConnection(Connection):
         lengths = np.array([(n - 1) * pitch + stagger for n in rows])
 
         def describe(i):
-            at = f" at {units.fraction(pitch, unit=' in')}" if rows[i] > 1 else ""
-            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, l = {units.fraction(lengths[i], unit=' in')}"
+            at = f" at {units.length(pitch)}" if rows[i] > 1 else ""
+            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, l = {units.length(lengths[i])}"
 
         return Sweep(lengths, [self.at(rows=n, pitch=pitch) for n in rows], rows.index(given.rows) if given.rows in rows else None, describe, stretched,
                      f"{given.rows} rows at other pitches", marks=tuple(f"{n} rows" for n in rows))

@@ -35,7 +35,7 @@ def installation(c):
     if c.element.plies == 2 and given.plates == 2:
         raise InputError("plates = 2: a double angle is bolted to one plate between its angles")
     if c.element.plies == 2 and c.element.gap < given.plate_thickness - 1e-9:
-        raise InputError(f"gap = {units.fraction(c.element.gap, unit=' in')} is less than the plate's thickness of {units.fraction(given.plate_thickness, unit=' in')}")
+        raise InputError(f"gap = {units.length(c.element.gap)} is less than the plate's thickness of {units.length(given.plate_thickness)}")
     if given.U_by_hand is not None and len(given.U_basis.strip()) < 10:
         raise InputError("U_by_hand needs a written basis in U_basis")
     if (given.fillers == 0) != (given.filler_thickness == 0):
@@ -51,8 +51,8 @@ def layout(c):
         if out := outside(strip, ply.width, ply.end):
             hole = strip[out[0]]
             x = hole.x if ply.name == "member" else -hole.x
-            raise InputError(f"hole at x = {units.fraction(x, unit=' in')}, y = {units.fraction(hole.y, unit=' in')} is cut by an edge of the {named[ply.name]}, "
-                             f"{units.fraction(ply.width, unit=' in')} wide; move it or change the part")
+            raise InputError(f"hole at x = {units.length(x)}, y = {units.length(hole.y)} is cut by an edge of the {named[ply.name]}, "
+                             f"{units.length(ply.width)} wide; move it or change the part")
     _other_leg(c)
     _room_for_plates(c)
     pair = closest_pair(joint.pattern)
@@ -63,7 +63,7 @@ def layout(c):
         tight = tightest_pair(ply.bolted)
         if tight and tight.clear < d - 1e-9:
             what = "overlap" if tight.clear <= 0 else f"are {units.printed(tight.clear)} in clear of each other"
-            raise ScopeError(f"holes of the {named[ply.name]} {what}: the clear distance may not be less than d = {units.fraction(d, unit=' in')} "
+            raise ScopeError(f"holes of the {named[ply.name]} {what}: the clear distance may not be less than d = {units.length(d)} "
                              f"({CLAUSES['minimum spacing'][c.basis.edition]})")
     room = details.wrench_room(joint)
     if room is not None:
@@ -88,12 +88,12 @@ def _other_leg(c):
     for hole in open_holes:
         gage, radius = part.t - hole.y, hole.across / 2
         if not part.t + radius <= gage <= part.other_leg - radius or hole.x + radius > c.joint.member.end.x0:
-            raise InputError(f"other_leg_holes: a hole at x = {units.fraction(hole.x, unit=' in')}, y = {units.fraction(gage, unit=' in')} is not within the outstanding "
-                             f"leg of {units.fraction(part.other_leg, unit=' in')}")
+            raise InputError(f"other_leg_holes: a hole at x = {units.length(hole.x)}, y = {units.length(gage)} is not within the outstanding "
+                             f"leg of {units.length(part.other_leg)}")
     tight = tightest_pair(open_holes)
     if tight and tight.clear < c.size.d - 1e-9:
         raise InputError(f"other_leg_holes: two holes are {units.printed(max(tight.clear, 0))} in clear of each other; "
-                         f"at least {units.fraction(c.size.d, unit=' in')} are needed")
+                         f"at least {units.length(c.size.d)} are needed")
 
 
 def _room_for_plates(c):
@@ -104,8 +104,8 @@ def _room_for_plates(c):
     lo = c.joint.pattern[0].y - c.joint.plate_pattern[0].y
     hi = lo + c.joint.plate.width
     if lo < -1e-9 or (part.name == "web" and hi > part.width + 1e-9):
-        raise InputError(f"plate_width = {units.fraction(c.joint.plate.width, unit=' in')}: the plate overlaps a flange of {part.member}; beside the "
-                         f"{part.name} there is room for {units.fraction(part.width, unit=' in')}, and plate_offset shifts the plate")
+        raise InputError(f"plate_width = {units.length(c.joint.plate.width)}: the plate overlaps a flange of {part.member}; beside the "
+                         f"{part.name} there is room for {units.length(part.width)}, and plate_offset shifts the plate")
 
 
 def _eccentricity(c):

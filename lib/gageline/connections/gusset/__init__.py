@@ -208,7 +208,7 @@ class GussetConnection(Connection):
     def _weld_size(self, id, title, thinner, provided):
         least = weld_facts.minimum_fillet(thinner)
         return Check(id, title, "brace", "J2.2b, Table J2.4", kind="detailing", nominal=least, available=provided, demand=least, unit="in",
-                     notes=(f"{title}: by the thinner part joined, {units.fraction(thinner, unit=' in')}.",))
+                     notes=(f"{title}: by the thinner part joined, {units.length(thinner)}.",))
 
     # What the report says beside the checks
 
@@ -267,7 +267,7 @@ class GussetConnection(Connection):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, design = self.inputs, self.design
         rows = [("Gusset", f"PL {units.fraction(given.gusset_thickness)}, {self.gusset_material.name}, "
-                           f"{units.fraction(given.gusset_end_width, unit=' in')} wide at its free end")]
+                           f"{units.length(given.gusset_end_width)} wide at its free end")]
         if design.joint:
             group = self.bolt_group
             rows += [("Brace", f"{given.brace}, {design.joint.n_bolts} bolts {self.size.name}{'' if self.size.metric else ' in'}, "
@@ -276,11 +276,11 @@ class GussetConnection(Connection):
                      ("Holes", f"gusset {given.gusset_holes}")]
         else:
             welds = design.welds
-            rows.append(("Brace", f"{given.brace}, {welds.lines} fillets {units.fraction(welds.w_f, unit=' in')}, each {units.fraction(welds.l, unit=' in')} long"))
+            rows.append(("Brace", f"{given.brace}, {welds.lines} fillets {units.length(welds.w_f)}, each {units.length(welds.l)} long"))
         for edge in (design.edges.beam, design.edges.column):
             if edge is not None:
-                rows.append((_on(design.edges, edge), f"{units.fraction(edge.L, unit=' in')} on the {edge.support.part} of {edge.support.name}, fillets "
-                                                         f"{units.fraction(edge.w_f, unit=' in')} on both sides, {given.electrode}"))
+                rows.append((_on(design.edges, edge), f"{units.length(edge.L)} on the {edge.support.part} of {edge.support.name}, fillets "
+                                                         f"{units.length(edge.w_f)} on both sides, {given.electrode}"))
         return rows
 
     def tables(self, part):

@@ -80,8 +80,8 @@ def build(c):
                   constants(c.basis))
         l, reach = welds.l, (-welds.g / 2, welds.g / 2)
         if welds.g > given.gusset_end_width:
-            raise InputError(f"brace_weld_apart = {units.fraction(welds.g, unit=' in')} is more than the gusset's free end of "
-                             f"{units.fraction(given.gusset_end_width, unit=' in')}")
+            raise InputError(f"brace_weld_apart = {units.length(welds.g)} is more than the gusset's free end of "
+                             f"{units.length(given.gusset_end_width)}")
     supported = _edges(c)
     place = _layout(given, supported, l)
     for off in reach:
@@ -138,7 +138,7 @@ def _joint(c, axis):
     ply = Ply("plate", steel.F_y, steel.F_u, t, 1, 1, tuple(mirrored(holes)), end, given.gusset_end_width, given.gusset_holes,
               constants(c.basis))
     if outside(list(ply.holes), ply.width, end):
-        raise InputError(f"a bolt hole is cut by an edge of the gusset's free end, {units.fraction(ply.width, unit=' in')} wide; move it or widen the gusset")
+        raise InputError(f"a bolt hole is cut by an edge of the gusset's free end, {units.length(ply.width)} wide; move it or widen the gusset")
     member = Ply("brace", steel.F_y, steel.F_u, t, 1, 1, tuple(holes), End(1e3), ply.width, "STD", constants(c.basis))
     slip = given.installation == "slip-critical"
     bolts = Bolts(c.size.name, group.name, c.size.d, group.F_nv_X if given.threads == "X" else group.F_nv_N, given.threads, given.shear_planes,
@@ -165,7 +165,7 @@ def _welds(given):
     if missing := [name for name in names if getattr(given, name) is None]:
         raise InputError(f"input {missing[0]} is missing: the brace is connected by welds")
     if given.brace_weld_length < 4 * given.brace_weld:
-        raise ScopeError(f"brace_weld_length = {units.fraction(given.brace_weld_length, unit=' in')} is less than 4 times the leg of the weld (J2.2b)")
+        raise ScopeError(f"brace_weld_length = {units.length(given.brace_weld_length)} is less than 4 times the leg of the weld (J2.2b)")
     return brace_end.BraceWelds(given.brace_weld_lines, given.brace_weld_length, given.brace_weld_apart, given.brace_weld,
                                 weld_facts.electrode(given.electrode).F_EXX)
 
@@ -245,5 +245,5 @@ def _gusset(c, corner, lengths):
         needed = gusset_plates.compact_thickness.bare(c.gusset_material.F_y, max(corner, 0.0), E, max(lengths[0], 1e-6))
         if given.gusset_thickness < needed:
             raise ScopeError(f"gusset_support = 'compact corner': {units.printed(needed)} in of thickness are needed for that, the gusset has "
-                             f"{units.fraction(given.gusset_thickness, unit=' in')}; use noncompact corner")
+                             f"{units.length(given.gusset_thickness)}; use noncompact corner")
     return Gusset(given.gusset_end_width, 0.0, given.gusset_end_width, K, None, basis)

@@ -7,9 +7,9 @@ from ...check import worst_first
 from ...facts import shapes
 from ...figures import style
 from ...figures.drafting import Drawing, broken
-from ...figures.elevation import described, ratio
+from ...figures.elevation import bolt_size, described, ratio
 from ...geometry import Block
-from ...units import ceil_figures, drawn_in_si, force, fraction
+from ...units import ceil_figures, force, fraction
 
 TALLEST, LARGEST = 4.3, 0.3  # [in] of the elevation on paper; scale beyond which a small gusset looks coarse
 SECTION_SCALE, FLANGE_SHOWN = 0.62, 3.4  # scale of the sections; [in] of the support shown beside the gusset
@@ -187,7 +187,7 @@ def _annotate(paper, connection, x1, heights):
     rows = [(place.at(place.last + 0.15 * design.length, place.half_end * 0.86), f"PL {fraction(given.gusset_thickness)}")]
     if design.joint:
         hole = max(design.plate.holes, key=lambda hole: (hole.y, hole.x))
-        size = connection.size.name if connection.size.metric else (f"{connection.size.name} in" if drawn_in_si() else fraction(connection.size.d, unit=" in"))
+        size = bolt_size(connection)
         group = connection.bolt_group
         rows.append((place.at(place.last + design.length + hole.x, hole.y - design.axis),
                      f"{design.joint.n_bolts} {size} {group.product or group.name}-{given.threads}"))

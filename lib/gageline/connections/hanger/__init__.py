@@ -180,12 +180,13 @@ class HangerConnection(Connection):
         fatigue.refuse_snug(given.installation)
         if h.psi or h.lower:
             why = "inclination other than 0" if h.psi else "joined = 'bolted', in bearing with snug-tight bolts"
-            raise ScopeError(f"fatigue with {why} is not covered: Appendix 3 wants pretensioned joints, and bolts in tension alone; use vertical pull "
-                             "and welds to the stem")
+            raise ScopeError(f"fatigue with {why} is not covered: Appendix 3 wants pretensioned joints, and bolts in tension alone; use "
+                             "vertical pull and welds to the stem")
         prying = [by_id[f"{side} prying"] for side in ("fitting", "beam")]
         forces = [(fatigue.value_in(each, "T_q"), fatigue.value_in(each, "T_qt")) for each in prying if fatigue.holds(each, "T_qt")]
         if len(forces) < 2:
-            raise ScopeError("fatigue: the bolts do not carry the required pull with its prying, so the range of their force is unknown; strengthen them")
+            raise ScopeError("fatigue: the bolts do not carry the required pull with its prying, so the range of their force is "
+                             "unknown; strengthen them")
         T_q, T_qt = max(forces, key=lambda pair: pair[1])
         return (fatigue.Detail("bolts", "bolts to the beam in tension", "bolts", "G", "Table A-3.1, 8.5",
                                lambda do: fatigue.thread(do, size.d, size.tpi, size.metric, h.n),
@@ -257,17 +258,17 @@ class HangerConnection(Connection):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, h, fit = self.inputs, self.hanger, self.fitting
         n, size = h.n, self.sizes[0]
-        spacing = f"{given.rows} rows at {units.fraction(given.pitch, unit=' in')}" if given.rows > 1 else "1 row"
+        spacing = f"{given.rows} rows at {units.length(given.pitch)}" if given.rows > 1 else "1 row"
         if h.welds:
-            joint = f"{2 * h.welds.pieces} fillets {units.fraction(given.weld, unit=' in')}, {units.fraction(given.weld_length, unit=' in')} long, {given.electrode}"
+            joint = f"{2 * h.welds.pieces} fillets {units.length(given.weld)}, {units.length(given.weld_length)} long, {given.electrode}"
         else:
             joint = (f"{h.lower.n_bolts} bolts {self.sizes[1].name} in, {self.bolt_group.product or self.bolt_group.name}-{given.lower_threads}, "
                      f"holes {given.lower_holes}")
-        return [("Fitting", f"{fit.name} x {units.fraction(h.length, unit=' in')} long, {given.fitting_grade}"),
+        return [("Fitting", f"{fit.name} x {units.length(h.length)} long, {given.fitting_grade}"),
                 ("Beam", f"{self.beam.section.name}, {given.beam_grade}"),
                 ("Bolts to the beam", f"{n} bolts {size.name}{'' if size.metric else ' in'}, "
                                       f"{self.bolt_group.product or self.bolt_group.name}-{given.threads}, {given.installation}, {spacing}, "
-                                      f"gage {units.fraction(given.gage, unit=' in')}"),
+                                      f"gage {units.length(given.gage)}"),
                 ("Holes", f"fitting {given.fitting_holes}, beam {given.beam_holes}"),
                 ("Hung member", f"{self.hung.element.member}, {self.member_material.name}"), ("Joint at the stem", joint)]
 
@@ -333,8 +334,8 @@ class HangerConnection(Connection):
         lengths = np.array([(n - 1) * pitch + 2 * given.fitting_end for n in rows])
 
         def describe(i):
-            at = f" at {units.fraction(pitch, unit=' in')}" if rows[i] > 1 else ""
-            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, fitting {units.fraction(lengths[i], unit=' in')} long"
+            at = f" at {units.length(pitch)}" if rows[i] > 1 else ""
+            return f"{rows[i]} row{'s' if rows[i] > 1 else ''}{at}, fitting {units.length(lengths[i])} long"
 
         return Sweep(lengths, [self.at(rows=n, s=pitch) for n in rows], rows.index(given.rows), describe, stretched,
                      f"{given.rows} rows at other pitches", "length of the fitting along the beam, in", tuple(f"{n} rows" for n in rows))

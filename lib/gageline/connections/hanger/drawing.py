@@ -83,7 +83,8 @@ def elevation(c):
         svg, width = style.svg_text(drawn), style.fraction_of_text(drawn)
     h, governs = c.hanger, c.governing
     caption = f"Elevation along the beam, to scale; dimensions in inches. Marked: {governs.title}, governs, D/C = {ratio_text(governs.ratio)}."
-    alt = (f"{c.subject}: fitting {fraction(h.length, unit=' in')} long with {h.rows} rows of two bolts; the hung member is {c.inputs.joined} to the stem; "
+    alt = (f"{c.subject}: fitting {fraction(h.length, unit=' in')} long with {h.rows} rows of two bolts; "
+           f"the hung member is {c.inputs.joined} to the stem; "
            f"pull {force(h.P, ceil_figures)}. Marked: {governs.title}.")
     return style.Figure(svg, caption, alt, width)
 
@@ -137,7 +138,8 @@ def _elevation(c):
         items.append((f"{fraction(h.welds.w_f)} fillets, {fraction(h.welds.length)} long", at(end + 0.45 * h.welds.length, v1)))
     else:
         count, size = h.lower.n_bolts, c.sizes[1]
-        items.append((f"{count} bolts {_size(size)} {product}-{c.inputs.lower_threads}", at(end + c.inputs.member_end, max(hole.y for hole in h.lower.pattern) + v0)))
+        corner = at(end + c.inputs.member_end, max(hole.y for hole in h.lower.pattern) + v0)
+        items.append((f"{count} bolts {_size(size)} {product}-{c.inputs.lower_threads}", corner))
     items.append((f"{h.n} bolts {_size(c.sizes[0])} {product}-{c.inputs.threads}", (_rows(h)[-1], shape.t_f + 0.4 * h.bolts.d)))
     _labels(paper, items, x1 + pt(12), z0, top - pt(6))
     return figure

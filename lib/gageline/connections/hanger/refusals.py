@@ -73,7 +73,7 @@ def parts(c):
         if c.inputs.joined == "welded":
             raise ScopeError(f"joined = 'welded': a plate between the angles of {fit.name} is bolted here; use a tee for a welded end")
         if fit.gap < part.t - 1e-9 or fit.gap > part.t + 1 / 4:
-            raise InputError(f"gap = {units.fraction(fit.gap, unit=' in')} does not go with a plate of {units.fraction(part.t, unit=' in')}; "
+            raise InputError(f"gap = {units.length(fit.gap)} does not go with a plate of {units.length(part.t)}; "
                              "it is the plate's thickness, at most 1/4 in more")
     if c.demand.required_compression > 0:
         raise ScopeError(f"the hung member goes into compression ({units.printed(c.demand.required_compression)} kip): a hanger pulls only, "
@@ -86,10 +86,10 @@ def layout(c):
     d, narrow = size.d, min(fit.width, beam.section.b_f)
     half = c.hanger.upper.member.hole.across / 2
     if (narrow - given.gage) / 2 <= half:
-        raise InputError(f"gage = {units.fraction(given.gage, unit=' in')} is too wide: the holes leave the narrower flange, "
-                         f"{units.fraction(narrow, unit=' in')} wide")
+        raise InputError(f"gage = {units.length(given.gage)} is too wide: the holes leave the narrower flange, "
+                         f"{units.length(narrow)} wide")
     if given.fitting_end <= c.hanger.upper.member.hole.along / 2:
-        raise InputError(f"fitting_end = {units.fraction(given.fitting_end, unit=' in')}: the hole is cut by the end of the fitting")
+        raise InputError(f"fitting_end = {units.length(given.fitting_end)}: the hole is cut by the end of the fitting")
     least = min(given.gage, given.pitch if given.rows > 1 else given.gage)
     if least < 8 / 3 * d - 1e-9:
         raise ScopeError(f"holes {units.printed(least)} in apart: the minimum spacing is 2-2/3 d = {units.printed(8 / 3 * d)} in "
@@ -98,7 +98,7 @@ def layout(c):
         raise InputError(f"bolt {size.name} is too big for the gage: {units.printed(c.wrench_room)} in to the face beside it, "
                          f"{units.printed(c.enter(size))} in are needed to enter it")
     if given.beam_end < c.hanger.length / 2:
-        raise InputError(f"beam_end = {units.fraction(given.beam_end, unit=' in')}: half the fitting, {units.printed(c.hanger.length / 2)} in, "
+        raise InputError(f"beam_end = {units.length(given.beam_end)}: half the fitting, {units.printed(c.hanger.length / 2)} in, "
                          "does not fit on the beam")
     _stem(c)
 
@@ -135,9 +135,9 @@ def _stem(c):
                              "or set U_by_hand with its basis")
         return
     if length < 4 * given.weld - 1e-9:
-        raise ScopeError(f"weld_length = {units.fraction(length, unit=' in')} is less than four times the leg (J2.2b)")
+        raise ScopeError(f"weld_length = {units.length(length)} is less than four times the leg (J2.2b)")
     if length > 300 * given.weld:
-        raise ScopeError(f"weld_length = {units.fraction(length, unit=' in')} is more than 300 times the leg (J2.2b); use a larger weld or bolts")
+        raise ScopeError(f"weld_length = {units.length(length)} is more than 300 times the leg (J2.2b); use a larger weld or bolts")
 
 
 def enter(size):

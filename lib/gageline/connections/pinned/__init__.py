@@ -75,18 +75,18 @@ class PinnedConnection(Connection):
         if not self.eyebar and given.member_edge is None:
             raise InputError("input member_edge is missing: edge of the hole to the end of the pin plate, along the force")
         if self.eyebar and given.head_diameter <= given.member_width:
-            raise InputError(f"head_diameter = {units.fraction(given.head_diameter, unit=' in')} is not more than the width of the body, "
-                             f"{units.fraction(given.member_width, unit=' in')}")
+            raise InputError(f"head_diameter = {units.length(given.head_diameter)} is not more than the width of the body, "
+                             f"{units.length(given.member_width)}")
         parts = [("support", given.support_width, given.support_corner_cut, given.support_edge)]
         parts.append(("head", given.head_diameter, 0.0, 0.0) if self.eyebar else
                      ("member", given.member_width, given.member_corner_cut, given.member_edge))
         for name, width, cut, edge in parts:
             if width <= self.d_h + 0.25:
-                raise InputError(f"the {name} is {units.fraction(width, unit=' in')} wide: less than 1/8 in would be left on each side of a hole of "
+                raise InputError(f"the {name} is {units.length(width)} wide: less than 1/8 in would be left on each side of a hole of "
                                  f"{units.printed(self.d_h)} in")
             most = min((width - given.pin_diameter) / 2, edge + self.d_h / 2)
             if cut > most + 1e-9:
-                raise InputError(f"{name}_corner_cut = {units.fraction(cut, unit=' in')} cuts into the shear planes beyond the pin or the width beside it; "
+                raise InputError(f"{name}_corner_cut = {units.length(cut)} cuts into the shear planes beyond the pin or the width beside it; "
                                  f"at most {units.printed(most)} in")
         if given.pin_shear != "both" and len(given.pin_shear_basis.strip()) < 10:
             raise InputError("pin_shear other than both needs a written basis in pin_shear_basis")

@@ -60,8 +60,8 @@ class RodConnection(Connection):
         if inputs.thread_strength == "tensile stress area" and self.basis.edition == "360-16":
             raise ScopeError("thread_strength = 'tensile stress area': 360-16 gives threads 0.75 F_u on the body area only (Table J3.2)")
         if inputs.body_diameter is not None and inputs.body_diameter > self.thread.d + 1e-9:
-            raise InputError(f"body_diameter = {units.fraction(inputs.body_diameter, unit=' in')} is more than the thread's "
-                             f"{units.fraction(self.thread.d, unit=' in')}; give the diameter of the thread as rod")
+            raise InputError(f"body_diameter = {units.length(inputs.body_diameter)} is more than the thread's "
+                             f"{units.length(self.thread.d)}; give the diameter of the thread as rod")
         self.material = self._material(inputs.rod_grade, ("rod",), self.thread.d)
         self.materials = {}
         self.rod = RodDesign(self.thread.d, inputs.body_diameter or self.thread.d, self.thread.tpi, self.thread.metric, self.material.F_y,
@@ -88,19 +88,19 @@ class RodConnection(Connection):
         d, hole = self.thread.d, self._of(end, "hole") or facts.standard_hole(self.thread.d)
         w_n, washer = facts.nut_width(d, self.inputs.nut), None
         if hole < d - 1e-9:
-            raise InputError(f"{end}_hole = {units.fraction(hole, unit=' in')} is smaller than the rod, {units.fraction(d, unit=' in')}")
+            raise InputError(f"{end}_hole = {units.length(hole)} is smaller than the rod, {units.length(d)}")
         if given_washer(self.inputs, end):
             w_w, t_w = self._of(end, "washer"), self._of(end, "washer_thickness")
             steel = self.materials[f"{end} plate washer"] = self._material(self._of(end, "washer_grade"), ("plate", "bar"), t_w)
             washer = (w_w, t_w, steel.F_y, d + WASHER_HOLE)
             if not max(w_n, hole + BESIDE_NUT) < w_w <= w:
-                raise InputError(f"{end}_washer = {units.fraction(w_w, unit=' in')} must be wider than the nut, {units.printed(w_n)} in, and than the hole by "
-                                 f"1/8 in, and not wider than the plate, {units.fraction(w, unit=' in')}")
+                raise InputError(f"{end}_washer = {units.length(w_w)} must be wider than the nut, {units.printed(w_n)} in, and than the hole by "
+                                 f"1/8 in, and not wider than the plate, {units.length(w)}")
         elif hole > w_n - BESIDE_NUT + 1e-9:
-            raise InputError(f"{end}_hole = {units.fraction(hole, unit=' in')} leaves the nut, {units.printed(w_n)} in wide, less than 1/16 in all round; "
+            raise InputError(f"{end}_hole = {units.length(hole)} leaves the nut, {units.printed(w_n)} in wide, less than 1/16 in all round; "
                              f"give a plate washer ({end}_washer)")
         if w <= max(w_n, hole):
-            raise InputError(f"{end}_width = {units.fraction(w, unit=' in')}: the plate is narrower than the nut, {units.printed(w_n)} in")
+            raise InputError(f"{end}_width = {units.length(w)}: the plate is narrower than the nut, {units.printed(w_n)} in")
         return Nut(end, w_n, hole, plate.F_y, t, w, self._of(end, "span"), washer)
 
     def _lug(self, end, plate, t, w):
@@ -110,7 +110,7 @@ class RodConnection(Connection):
             raise ScopeError(f"{end}_hole_clearance = {units.printed(clearance)} in: D5 covers pin holes up to "
                              f"{'1/32' if self.basis.edition == '360-16' else '1/16'} in larger than the pin")
         if w <= d + clearance + 0.25:
-            raise InputError(f"{end}_width = {units.fraction(w, unit=' in')} leaves less than 1/8 in on each side of the pin hole")
+            raise InputError(f"{end}_width = {units.length(w)} leaves less than 1/8 in on each side of the pin hole")
         steel = self.materials[f"{end} pin"] = self._material(self._of(end, "pin_grade"), ("rod", "bar"), d)
         made = pin_plate.PinPlate(end, f"{end.capitalize()} lug", 1, plate.F_y, plate.F_u, t, w, self._of(end, "edge"), d + clearance,
                                   b_0=constants(self.basis).beside_pin)

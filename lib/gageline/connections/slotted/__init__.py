@@ -167,7 +167,7 @@ class SlottedConnection(Connection):
         reasons = {"member block": "every wall is sheared along its weld line; the small part torn across a wall is not counted: J4.2 is checked"}
         if not self._long_slot(joint):
             reasons["slot yielding"] = "the tube is not slotted" if not joint.concentric else \
-                f"the slotted length without welds of {units.fraction(joint.unwelded, unit=' in')} is not more than the tube's depth: its yielding would " \
+                f"the slotted length without welds of {units.length(joint.unwelded)} is not more than the tube's depth: its yielding would " \
                 "not lengthen the member by much, so rupture governs it"
         if joint.reinforcement is None:
             reasons |= dict.fromkeys(("rupture beyond plates", "plates weld"), "no reinforcing plates")
@@ -181,7 +181,7 @@ class SlottedConnection(Connection):
         if not joint.concentric:
             return ()
         notes = [f"The slot is deducted whether or not the weld closes its end; slotted length without welds "
-                 f"{units.fraction(joint.unwelded, unit=' in')}." if not self.inputs.end_return else
+                 f"{units.length(joint.unwelded)}." if not self.inputs.end_return else
                  "The slot is deducted although the welds return round the gusset's edge and close it: the return is not counted."]
         if joint.reinforcement is None:
             notes += advice.reinforcement(joint, T, nominal, state, self.basis.method)
@@ -268,7 +268,7 @@ class SlottedConnection(Connection):
         grid = np.arange(math.ceil(low * 8 - 1e-9), math.floor(max(1.5 * l, 2.2 * tube.depth) * 8) + 1) / 8
         grid = grid[np.broadcast_to(member.shear_lag_of_net_section(silent, self.at(grid)), grid.shape) > 0.05]
         lengths = np.unique(np.append(grid, l))
-        return Sweep(lengths, self.at(lengths), int(np.searchsorted(lengths, l)), lambda i: f"four welds of {units.fraction(lengths[i], unit=' in')}",
+        return Sweep(lengths, self.at(lengths), int(np.searchsorted(lengths, l)), lambda i: f"four welds of {units.length(lengths[i])}",
                      label="length l of each weld line, in")
 
     def at(self, l):

@@ -99,4 +99,4 @@ def gap_at_bar(tube, width):
 
 def fraction(value):
     """Return a length as printed in sentences."""
-    return f"{units.fraction(value, unit=' in')}"
+    return f"{units.length(value)}"

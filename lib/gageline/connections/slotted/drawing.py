@@ -232,7 +232,8 @@ def elevation(c):
     ratio = ratio_text(governs.ratio)
     caption = f"Elevation in the plane of the gusset, to scale; dimensions in inches. Heavy: {marked} (D/C {ratio}, which governs)."
     how = "slotted over one gusset" if joint.concentric else "between two gussets"
-    alt = (f"Elevation of {joint.tube.name} {how} {fraction(joint.plate.t, unit=' in')} thick and {fraction(joint.plate.width, unit=' in')} wide, with four "
+    alt = (f"Elevation of {joint.tube.name} {how} {fraction(joint.plate.t, unit=' in')} thick and "
+           f"{fraction(joint.plate.width, unit=' in')} wide, with four "
            f"fillet welds of {fraction(joint.leg, unit=' in')}, {fraction(joint.l, unit=' in')} long. Marked: {marked}, D/C {ratio}.")
     return style.Figure(svg, caption, alt, width)
 

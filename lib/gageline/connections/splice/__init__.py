@@ -173,7 +173,7 @@ class SpliceConnection(Connection):
             notes.append((f"Splice plates in compression: K = {states.K_PLATE} between the rows beside the joint.", "published design example"))
         for group in splice.groups:
             if group.joint.t_filler:
-                notes.append((f"Fillers of {units.fraction(group.joint.t_filler, unit=' in')} at a shear plane of the {group.name}, not developed "
+                notes.append((f"Fillers of {units.length(group.joint.t_filler)} at a shear plane of the {group.name}, not developed "
                               "outside the joint.", "input"))
         if self.member_material.note:
             notes.append((f"Member steel {self.member_material.name}: {self.member_material.note}", "availability, from memory"))
@@ -198,7 +198,7 @@ class SpliceConnection(Connection):
     def designed(self):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, splice = self.inputs, self.design
-        rows = [("Member", f"{self.element.member}, {self.member_material.name}; gap between the halves {units.fraction(given.joint_gap, unit=' in')}")]
+        rows = [("Member", f"{self.element.member}, {self.member_material.name}; gap between the halves {units.length(given.joint_gap)}")]
         product = self.bolt_group.product or self.bolt_group.name
         for group in splice.groups:
             ply, joint = group.joint.plate, group.joint
@@ -241,7 +241,7 @@ class SpliceConnection(Connection):
 
         def describe(i):
             rows = " and ".join(f"{group.rows} rows in the {group.name if self.design.section else 'plates'}" for group in designs[i].groups)
-            return f"{rows}, l = {units.fraction(lengths[i], unit=' in')}"
+            return f"{rows}, l = {units.length(lengths[i])}"
 
         return Sweep(lengths, designs, more.index(0), describe,
                      label=f"length of the {'flange' if groups[0].name == 'flange' else 'bolt'} group on one side, in",

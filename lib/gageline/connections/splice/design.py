@@ -130,7 +130,7 @@ def _layout(c, group):
     joint, name = group.joint, group.name
     for ply in (joint.member, joint.plate):
         if outside(list(ply.holes), ply.width, ply.end):
-            raise InputError(f"{name} splice: a hole is cut by an edge of the {ply.name}, {units.fraction(ply.width, unit=' in')} wide; "
+            raise InputError(f"{name} splice: a hole is cut by an edge of the {ply.name}, {units.length(ply.width)} wide; "
                              f"change {name}_gage or the part")
     pair = closest_pair(joint.pattern)
     if pair and pair.spacing < 8 / 3 * c.size.d - 1e-9:
@@ -138,7 +138,7 @@ def _layout(c, group):
                          f"{units.printed(8 / 3 * c.size.d)} in ({CLAUSES['minimum spacing'][c.basis.edition]})")
     shape = c.element.section
     if name == "web" and shape is not None and joint.plate.width > shape.d - 2 * shape.k_des + 1e-9:
-        raise InputError(f"web_plate_width = {units.fraction(joint.plate.width, unit=' in')}: between the fillets of {shape.name} there is room for "
+        raise InputError(f"web_plate_width = {units.length(joint.plate.width)}: between the fillets of {shape.name} there is room for "
                          f"{units.printed(shape.d - 2 * shape.k_des)} in")
     if name == "flange":
         faces = [hole.y for hole in joint.pattern if shape.t_w / 2 >= abs(hole.y - shape.b_f / 2) - 1e-9]

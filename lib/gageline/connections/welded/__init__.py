@@ -123,11 +123,13 @@ class WeldedConnection(Connection):
         """Return the details that live load may crack: member and plate at the ends of the welds, and their throats."""
         end = self.end
         if end.across or not end.sided:
-            raise ScopeError(f"welds = {self.inputs.welds!r}: Table A-3.1 has no case of a lap joint with transverse fillets; use longitudinal ones only")
+            raise ScopeError(f"welds = {self.inputs.welds!r}: Table A-3.1 has no case of a lap joint with transverse fillets; use "
+                             "longitudinal ones only")
         if self.element.series in layout.ANGLES and not end.concentric:
             raise ScopeError("the welds of the angle do not balance on its centroid, as case 4.1 of Table A-3.1 and J1.7 ask under cyclic load; "
                              "give weld_balanced")
-        note = "" if self.element.eccentricity is None else "Shear lag lowers the area; bending from the eccentricity across the plate is in it only so far."
+        note = "" if self.element.eccentricity is None else \
+            "Shear lag lowers the area; bending from the eccentricity across the plate is in it only so far."
         return (fatigue.weld_ends("member", "Member", self.element.t, ("member rupture", "A_e"), end.member.F_y, note),
                 fatigue.weld_ends("plate", "Plate", self.inputs.plate_thickness, ("Whitmore yielding", "A_g"), end.plate.F_y),
                 fatigue.throats("weld", "Welds", "weld"))
@@ -192,15 +194,15 @@ class WeldedConnection(Connection):
     def designed(self):
         """Return (item, what is to be built) rows for comparison with the drawings."""
         given, end, part = self.inputs, self.end, self.element
-        leg = units.fraction(end.w_f, unit=" in")
+        leg = units.length(end.w_f)
         if not end.sided:
-            welds = f"{leg} fillet across the end of the member and across the end of the plate, {units.fraction(end.g, unit=' in')} each"
+            welds = f"{leg} fillet across the end of the member and across the end of the plate, {units.length(end.g)} each"
         elif end.equal:
-            welds = f"{leg} fillet along both edges, {units.fraction(end.l_1, unit=' in')} each"
+            welds = f"{leg} fillet along both edges, {units.length(end.l_1)} each"
         else:
-            welds = f"{leg} fillet, {units.fraction(end.l_1, unit=' in')} along the {end.edges[0]}, {units.fraction(end.l_2, unit=' in')} along the {end.edges[1]}"
+            welds = f"{leg} fillet, {units.length(end.l_1)} along the {end.edges[0]}, {units.length(end.l_2)} along the {end.edges[1]}"
         if end.across == 1:
-            welds += f", and {units.fraction(end.g, unit=' in')} across the end of the {'plate' if end.on_plate else 'member'}"
+            welds += f", and {units.length(end.g)} across the end of the {'plate' if end.on_plate else 'member'}"
         if end.groups > 1:
             welds += f"; {end.groups} groups alike"
         member = f"{part.member}, {self.member_material.name}"
@@ -209,7 +211,7 @@ class WeldedConnection(Connection):
         plates = f"{end.plate.pieces} PL {units.fraction(given.plate_thickness)} x {units.fraction(given.plate_width)}, {self.plate_material.name}"
         return [("Member", member), ("Plates", plates),
                 ("Welds", welds), ("Filler metal", f"{self.electrode.name}, equal legs"),
-                ("Lap", f"{units.fraction(end.lap, unit=' in')} along the load")]
+                ("Lap", f"{units.length(end.lap)} along the load")]
 
     @property
     def design(self):

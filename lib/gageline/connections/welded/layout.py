@@ -95,7 +95,7 @@ def lengths(c, l_t):
     l_2 = welded_ends.balanced_toe_length.bare(given.weld_balanced, centroid(part), part.width, l_t)
     l_1 = welded_ends.balanced_heel_length.bare(given.weld_balanced, l_2, l_t)
     if l_2 < 4 * given.weld_size:
-        raise InputError(f"weld_balanced = {units.fraction(given.weld_balanced, unit=' in')} leaves {units.printed(l_2)} in along the toe, less than four "
+        raise InputError(f"weld_balanced = {units.length(given.weld_balanced)} leaves {units.printed(l_2)} in along the toe, less than four "
                          "times the leg size (J2.2b(c)); lengthen it" + (" or leave out the weld across the end" if l_t else ""))
     return _up(l_1), _up(l_2), (l_1, l_2)
 
@@ -119,7 +119,7 @@ def balanced_steps(c):
     do, l_t = Working(), c.end.l_t
     l_2 = do(welded_ends.balanced_toe_length, c.inputs.weld_balanced, centroid(c.element), c.element.width, l_t)
     do(welded_ends.balanced_heel_length, c.inputs.weld_balanced, l_2, l_t)
-    do.say(f"Rounded up: {units.fraction(c.end.l_1, unit=' in')} along the heel, {units.fraction(c.end.l_2, unit=' in')} along the toe.")
+    do.say(f"Rounded up: {units.length(c.end.l_1)} along the heel, {units.length(c.end.l_2)} along the toe.")
     return tuple(do.steps)
 
 
@@ -140,10 +140,10 @@ def lines(c):
         if given.plate_offset:
             raise InputError("plate_offset: a plate narrower than the member is centred on it (J1.7); leave it out")
         return narrow, part.width - narrow, narrow, True
-    what = f"plate_width = {units.fraction(given.plate_width, unit=' in')}: beside the {part.name} of {part.member}, {units.fraction(part.width, unit=' in')} wide, "
+    what = f"plate_width = {units.length(given.plate_width)}: beside the {part.name} of {part.member}, {units.length(part.width)} wide, "
     if part.name in ("flange", "web"):
         raise InputError(f"{what}the welds need a ledge of {units.printed(room + TOL)} in on both sides; make the plate wider or narrower")
-    raise InputError(f"{what}the fillets need a ledge of {units.fraction(given.weld_size, unit=' in')} on both sides; widen the plate, or shift it "
+    raise InputError(f"{what}the fillets need a ledge of {units.length(given.weld_size)} on both sides; widen the plate, or shift it "
                      "with plate_offset; a plate narrower than the member is covered on flanges and webs only")
 
 
@@ -156,7 +156,7 @@ def build(c):
     l_t = y_2 - y_1 if across == 1 else 0.0
     l_1, l_2, exact = lengths(c, l_t)
     if max(l_1, l_2) > given.lap + TOL:
-        raise InputError(f"lap = {units.fraction(given.lap, unit=' in')} is shorter than the longer weld of {units.fraction(max(l_1, l_2), unit=' in')}; "
+        raise InputError(f"lap = {units.length(given.lap)} is shorter than the longer weld of {units.length(max(l_1, l_2))}; "
                          "lengthen the lap")
     y_w = (y_2 - y_1) / 2 if across == 2 else welded_ends.centroid_of_welds.bare(l_1, l_2, l_t, y_2 - y_1)
     target = centroid(part) if part.series in ANGLES else (y_2 - y_1) / 2

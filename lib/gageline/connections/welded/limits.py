@@ -18,7 +18,7 @@ def detailing(c):
     end, given, edition = c.end, c.inputs, c.basis.edition
     thin = min(end.member.t, end.plate.t)
     out = [limit("fillet minimum", "Leg size, minimum (Table J2.4)", "weld", clause(edition, "(a)"), facts.minimum_fillet(thin), end.w_f, (),
-                 notes=(f"Minimum size by the thinner part joined, {units.fraction(thin, unit=' in')}.",))]
+                 notes=(f"Minimum size by the thinner part joined, {units.length(thin)}.",))]
     out.append(_largest(end, edition))
     do = Working()
     shortest = min(line.length for line in (*end.longitudinal, *end.transverse))
