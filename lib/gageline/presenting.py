@@ -2,9 +2,9 @@
 
 import functools
 import re
-from dataclasses import replace
 
 from . import check, units
+from .connections.si_tables import in_si
 from .editions import REFERENCES
 from .formula import Formula
 from .loads import Demands
@@ -338,35 +338,10 @@ def _detailing(connection):
             *([sheet.note(runs=" ".join(remarks))] if remarks else [])]
 
 
-def _in_si(made):
-    """Return a family's table in SI: columns by the unit in their head, or in words below the table where the head names none."""
-    if "unit" not in made.caption and not any(re.search(r", (in|in²|kip|kip·in)$", head) for head in made.heads) and "in kip" not in made.caption:
-        return replace(made, rows=tuple(tuple(units.told(cell, "SI") for cell in row) for row in made.rows), remark=units.told(made.remark, "SI"))
-    named = [re.search(r", (in|in²|kip|kip·in)$", head) for head in made.heads]
-    forces = "kip" if "in kip" in made.caption else ""
-    column = [found[1] if found else forces if i and not re.search(r"l_w/w_f|share|alpha|lines", head) else ""
-              for i, (head, found) in enumerate(zip(made.heads, named))]
-    heads = tuple(head[:found.start()] + f", {units.shown_as(found[1], 'SI')[0]}" if found else head for head, found in zip(made.heads, named))
-    rows = tuple(tuple(_cell(cell, unit) for cell, unit in zip(row, column)) for row in made.rows)
-    caption = units.told(made.caption.replace("in kip", "in kN"), "SI")
-    return replace(made, heads=heads, rows=rows, caption=caption, remark=units.told(made.remark, "SI"))
-
-
-def _cell(cell, unit):
-    """Return a cell of a table in SI: its leading number times the unit's factor."""
-    found = re.match(r"[−-]?[\d.,/¼½¾⅛⅜⅝⅞-]*\d?[\d¼½¾⅛⅜⅝⅞]", cell)
-    if not unit or not found:
-        return units.told(cell, "SI")
-    number = units.read(f"{found[0].replace('−', '-')} {unit.replace('²', '**2').replace('·', '*')}", unit)
-    if unit == "in":
-        return units.millimetres(number) + cell[found.end():]
-    return units.printed(number * units.shown_as(unit, "SI")[1]) + cell[found.end():]
-
-
 def _table(made, system="US"):
     """Return a family's own table as blocks."""
     if system == "SI":
-        made = _in_si(made)
+        made = in_si(made)
     columns = [{"head": runs_of(head), "align": "right" if i else "left"} for i, head in enumerate(made.heads)]
     rows = [{"cells": [runs_of(cell) for cell in row]} for row in made.rows]
     out = [sheet.heading(text=made.title, level=2), sheet.table(columns=columns, rows=rows, caption=runs_of(made.caption))]
