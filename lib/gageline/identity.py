@@ -12,6 +12,10 @@ from .sheet.assets import templates_root
 _STANDS_ON = ("handcalcs", "pint", "numpy", "matplotlib", "nbconvert", "pypandoc_binary", "typst")
 
 
+_TRAVELLERS = ("_templates", "_demo", "_published")
+"""What travels in a wheel inside the package and lies beside it in a checkout: no part of the program's own hash."""
+
+
 @functools.cache
 def program_hash():
     """Return the SHA-256 over the package's code and tables, names included."""
@@ -21,6 +25,8 @@ def program_hash():
 def _hash(root, patterns):
     digest = hashlib.sha256()
     for path in sorted(path for pattern in patterns for path in root.rglob(pattern)):
+        if path.relative_to(root).parts[0] in _TRAVELLERS:
+            continue
         digest.update(path.relative_to(root).as_posix().encode() + b"\0" + path.read_bytes() + b"\0")
     return digest.hexdigest()
 
@@ -33,8 +39,8 @@ def file_hash(path):
 def published_cases():
     """Return the paths of the published cases (TOML): in a wheel inside the package, in a checkout beside the tests; [] in neither."""
     package = Path(__file__).resolve().parent
-    for root in (package / "_published", package.parents[1] / "tests" / "published"):
-        if found := sorted(root.glob("cases*.toml")):
+    for root in (package / "_published", package.parents[1] / "tests" / "published" / "cases"):
+        if found := sorted(root.glob("*.toml")):
             return found
     return []
 

@@ -1,4 +1,4 @@
-"""The published cases of cases*.toml, one printed number at a time.
+"""The published cases of cases/*.toml, one printed number at a time.
 
 An example names its ``source``, the ``edition`` it follows and its ``evidence``: "found" (the page was read), "memory" (a published
 document recalled, its numbers recomputed) or "derived" (evaluated by hand from published constants: guards against change, no evidence).
@@ -11,22 +11,17 @@ Half the last printed digit is allowed; a source that rounds on the way gets a `
 """
 
 import functools
-import math
 import tomllib
 from collections import defaultdict
 from pathlib import Path
-from types import SimpleNamespace
 
 import pytest
-from helpers import checks, formulas, value_of
+from helpers import checks, value_of
 
-from gageline import families, geometry
+from gageline import families
+from gageline.archive import manual
 from gageline.check import FACTORS
-from gageline.facts import bolts as bolt_facts
-from gageline.facts import fatigue as fatigue_facts
-from gageline.facts import shapes
 from gageline.formula import EDITIONS
-from gageline.geometry.whitmore import whitmore
 
 EVIDENCE = ("found", "memory", "derived")
 EXAMPLE_KEYS = {"id", "source", "edition", "evidence", "work", "connection", "family", "computed_by", "results"}
@@ -61,19 +56,7 @@ def problems(example):
     return found
 
 
-def namespace():
-    """Return what the steps of ``work`` may call: formulas by module, computed bare, and the tables and the geometry."""
-    modules = defaultdict(SimpleNamespace)
-    for name, made in formulas().items():
-        _, _, module, function = name.split(".")
-        setattr(modules[module], function, made.bare)
-    facts = {"group": bolt_facts.bolt_group, "hole": bolt_facts.hole, "pretension": bolt_facts.pretension,
-             "minimum_edge": bolt_facts.minimum_edge, "shape": shapes.shape, "fatigue_facts": fatigue_facts}
-    return {**modules, **facts, **{name: getattr(geometry, name) for name in geometry.__all__}, "whitmore": whitmore,
-            "radians": math.radians}
-
-
-NAMES = namespace()
+NAMES = manual.names()
 
 
 def half_digit(printed):
@@ -117,11 +100,10 @@ class Runner:
         return phi * value if method == "LRFD" else value / omega
 
 
-FAMILY_OF_FILE = {"cases": "bolted", "cases_hollow": "slotted", "cases_pins": "pinned"}
 """File -> the family whose examples it holds where an example names none; other files bear the family's name."""
 
-EXAMPLES = [{"family": FAMILY_OF_FILE.get(path.stem, path.stem.removeprefix("cases_"))} | example
-            for path in sorted(Path(__file__).parent.glob("cases*.toml"))
+EXAMPLES = [{"family": path.stem} | example
+            for path in sorted((Path(__file__).parent / "cases").glob("*.toml"))
             for example in tomllib.loads(path.read_text(encoding="utf-8"))["example"]]
 
 

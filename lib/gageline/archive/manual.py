@@ -12,7 +12,7 @@ from types import SimpleNamespace
 from .. import __version__, families, formula, geometry, identity, provisions
 from ..check import FACTORS
 from ..errors import ReportError
-from ..facts import bolts, shapes
+from ..facts import bolts, fatigue, shapes
 from ..geometry.whitmore import whitmore
 from ..sheet import blocks as sheet
 from ..sheet.build import set_pdf, sheet_data
@@ -42,7 +42,7 @@ class Result:
 
 
 @functools.cache
-def _names():
+def names():
     """Return what the steps of a case may call: formulas by module, computed bare, tables and geometry."""
     for module in pkgutil.walk_packages(provisions.__path__, provisions.__name__ + "."):
         importlib.import_module(module.name)
@@ -52,7 +52,7 @@ def _names():
             _, _, module, function = name.split(".")
             setattr(modules[module], function, made.bare)
     facts = {"group": bolts.bolt_group, "hole": bolts.hole, "pretension": bolts.pretension, "minimum_edge": bolts.minimum_edge,
-             "shape": shapes.shape}
+             "shape": shapes.shape, "fatigue_facts": fatigue}
     return {**modules, **facts, **{name: getattr(geometry, name) for name in geometry.__all__}, "whitmore": whitmore, "radians": math.radians}
 
 
@@ -67,7 +67,7 @@ def work_out(example):
             given["demand_level"] = method
         return families.family(example.get("family", "bolted")).of(edition=edition, method=method, **given)
 
-    scope = dict(_names())
+    scope = dict(names())
     exec(example.get("work", ""), scope)
     out = []
     for row in example["results"]:
