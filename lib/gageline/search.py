@@ -11,7 +11,7 @@ import numpy as np
 
 from . import families, study, units
 from .editions import Basis
-from .errors import GagelineError, InputError, nearest
+from .errors import GagelineError, InputError, ScopeError, nearest
 from .facts import bolts as facts
 
 LENGTHS = ("pitch", "gage", "gage_from_back", "member_end", "plate_end", "plate_thickness", "plate_width")
@@ -113,16 +113,24 @@ def search(inputs, vary, objective="fewest bolts", *, edition="360-22", method="
     grids = dict(zip(lengths, (axis.ravel() for axis in np.meshgrid(*lengths.values(), indexing="ij")))) if lengths else {}
     size = max((grid.size for grid in grids.values()), default=1)
     collected, refused, evaluated, template = [], {}, 0, None
+    for name in ("fatigue_range", "fatigue_cycles", "seismic_system"):
+        if name in inputs or name in vary:
+            raise InputError(f"{name}: a search covers strength in tension only; leave it out, and check the layouts it finds with it")
     for values in itertools.product(*looped.values()):
         changed = dict(zip(looped, values))
         evaluated += size
         try:
             template = _topology(made, inputs | changed, lengths, basis)
+            if template.demand.required_compression > 0:
+                break
             collected.append(_evaluate(template, grids, size, changed))
         except GagelineError as error:
             refused[str(error)] = refused.get(str(error), 0) + 1
     if template is None:
         raise InputError(next(iter(refused)))
+    if template.demand.required_compression > 0:
+        raise InputError("the member goes into compression: a search covers strength in tension only; search with the tension alone, and check "
+                         "the layouts it finds with all loads")
     return _ranked(collected, weights, evaluated, refused, inputs, basis, keep)
 
 
@@ -138,6 +146,8 @@ def _evaluate(connection, grids, size, changed):
     if "gage" in grids and given.lines > 1:
         changes["gage"] = (grids["gage"],)
     joint = connection.at(**changes)
+    if joint.rows < 2 and connection.element.eccentricity is not None and given.U_by_hand is None:
+        raise ScopeError("one bolt per line: Table D3.1 case 2 needs a connection length, so no U applies")
     strengths = study.over(connection, joint, (size,))
     T = connection.demand.required_tension
     with np.errstate(divide="ignore", invalid="ignore"):

@@ -271,8 +271,8 @@ def length(value):
 def feet(value):
     """Return inches as feet and inches.
 
-    >>> feet(270.0), feet(126.5)
-    ("22'-6\"", "10'-6½\"")
+    >>> print(feet(270.0), feet(126.5))
+    22'-6" 10'-6½"
     """
     if _LENGTHS.get() == "SI":
         return f"{value * _MM:.0f} mm"

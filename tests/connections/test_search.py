@@ -90,7 +90,7 @@ class TestRanking:
 
 @pytest.mark.parametrize(("vary", "objective", "words"), [
     ({"rowz": [2]}, "fewest bolts", "rowz"), ({"rows": []}, "fewest bolts", "no values"), ({"rows": [2]}, "cheapest", "cheapest"),
-    ({"holes": ["0 in, 1 in"]}, "fewest bolts", "holes"), ({"pitch": ["3"]}, "fewest bolts", "unit")])
+    ({"holes": ["0 in, 1 in"]}, "fewest bolts", "holes"), ({"seismic_system": ["SCBF"]}, "fewest bolts", "tension only"), ({"pitch": ["3"]}, "fewest bolts", "unit")])
 def test_refuses_what_it_cannot_search(vary, objective, words):
     """Unknown inputs, empty lists, unknown objectives and missing units are one sentence each."""
     with pytest.raises(InputError, match=words):
@@ -126,3 +126,20 @@ class TestSweeps:
 
         assert pareto(found).svg == pareto(found).svg and f"{len(found.pareto())} of them" in pareto(found).alt
         assert "1.00" in drawn.svg and "this design" in drawn.svg
+
+
+def test_refuses_a_member_that_reverses():
+    """The search knows no buckling of the gusset: it says so instead of ranking layouts by half of their checks."""
+    inputs = {name: value for name, value in ANGLE.items() if name not in ("tension", "demand_level")}
+    inputs |= {"P_D": "2 kip", "P_W": "30 kip", "P_W_opposite": "-30 kip", "gusset_support": "single brace", "gusset_length": "6 in",
+               "bolt": "3/4", "pitch": "3 in", "gage_from_back": "2-1/2 in", "plate_thickness": "1/2 in"}
+    with pytest.raises(InputError, match="compression"):
+        search(inputs, {"rows": [2, 3]})
+
+
+def test_one_bolt_in_line_is_no_layout_of_a_partly_connected_member():
+    """Table D3.1 gives no U without a length, so the search finds none either, however small the load."""
+    small = ANGLE | {"tension": "1 kip", "bolt": "3/4", "gage_from_back": "2-1/2 in", "plate_thickness": "1/2 in", "pitch": "3 in"}
+
+    assert search(small, {"rows": [1]}).feasible == 0
+    assert search(small, {"rows": [2]}).feasible == 1
