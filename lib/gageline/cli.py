@@ -40,7 +40,7 @@ def new(mark: Annotated[str, typer.Argument(help="piece mark, which names the no
 
 
 @app.command()
-def report(notebook: Notebook, set_: Set = [], out: Annotated[Path | None, typer.Option("--out", "-o", help="the PDF to write")] = None,  # noqa: B006
+def report(notebook: Notebook, set_: Set = [], out: Annotated[Path | None, typer.Option("--out", "-o", help="the PDF to write")] = None,
            save: Annotated[bool, typer.Option("--save", help="write the notebook back with its outputs")] = False):
     """Run one calculation and make its PDF."""
     from . import running
@@ -54,7 +54,7 @@ def report(notebook: Notebook, set_: Set = [], out: Annotated[Path | None, typer
 
 
 @app.command()
-def quick(notebook: Notebook, set_: Set = []):  # noqa: B006
+def quick(notebook: Notebook, set_: Set = []):
     """Compute one calculation from its inputs alone and print its summary; no notebook is run, no PDF made."""
     _print_summary(_calc(notebook, set_).connection)
 
@@ -72,7 +72,7 @@ def search(notebook: Notebook, vary: Annotated[list[str], typer.Option("--vary",
 
 
 @app.command()
-def margins(notebook: Notebook, set_: Set = []):  # noqa: B006
+def margins(notebook: Notebook, set_: Set = []):
     """Print how far each input may drift before D/C reaches 1.00, and which check governs there."""
     from rich.table import Table
 

@@ -68,7 +68,7 @@ def _typed(inputs, name):
 def _text(inputs, name, value):
     """Return an input as it may be given again: quantities as texts with their unit."""
     unit = unit_of(inputs, name)
-    if unit is None or value is None or isinstance(value, str) or isinstance(value, int):
+    if unit is None or value is None or isinstance(value, (str, int)):
         return list(value) if isinstance(value, tuple) else value
     unit = {"": "", "rad": " rad"}.get(unit, f" {unit}")
     if isinstance(getattr(inputs, name), tuple) and isinstance(value, float):

@@ -390,7 +390,8 @@ def _works(connection):
 def closing(connection):
     """Return notation, references and cautions."""
     basis = connection.basis
-    rows = [{"latex": symbol.latex, "alt": symbol.spoken, "meaning": symbol.meaning, "unit": units.shown_as(symbol.unit, basis.units_system)[0] or "–"} for symbol in used_symbols(connection)]
+    rows = [{"latex": symbol.latex, "alt": symbol.spoken, "meaning": symbol.meaning,
+             "unit": units.shown_as(symbol.unit, basis.units_system)[0] or "–"} for symbol in used_symbols(connection)]
     works = [[basis.specification, REFERENCES[basis.edition]], [basis.loads_standard, REFERENCES[basis.loads]],
              *([name, REFERENCES[f"{name} {basis.edition}"]] for name in _works(connection))]
     return [sheet.heading(text="Notation"), sheet.notation(rows=rows), sheet.heading(text="References"), sheet.references(rows=works),

@@ -71,7 +71,8 @@ def _equation(block):
 def _verdict(block):
     said = {True: "OK", False: "N.G.", None: ""}[block["ok"]]
     quotient = f"{html.escape(block['text'])} = " if block["text"] else ""
-    return f'<div style="display:flex;justify-content:space-between;margin:.3em 0 1em"><span>{_runs(block["lhs"])} &emsp; D/C = {quotient}<b>{html.escape(block["ratio_text"])}</b></span><b>{said}</b></div>'
+    ratio = f'{_runs(block["lhs"])} &emsp; D/C = {quotient}<b>{html.escape(block["ratio_text"])}</b>'
+    return f'<div style="display:flex;justify-content:space-between;margin:.3em 0 1em"><span>{ratio}</span><b>{said}</b></div>'
 
 
 def _figure(block):

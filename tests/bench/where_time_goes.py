@@ -39,7 +39,7 @@ def report(laps):
         if cell["cell_type"] == "code" and "calc." in source:
             call = source.strip().splitlines()[-1]
             kind = "figures" if any(word in call for word in ("drawing", "curve", "permissible")) else "lines and tables"
-            part = lap(kind, lambda: eval(call, {"calc": calc})._repr_mimebundle_())  # noqa: B023
+            part = lap(kind, lambda: eval(call, {"calc": calc})._repr_mimebundle_())
             cell["outputs"] = [{"output_type": "execute_result", "data": part, "metadata": {}, "execution_count": number}]
         cell["execution_count"] = number
     convert, inside = maths._convert, []

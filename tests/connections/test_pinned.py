@@ -107,7 +107,7 @@ class TestPin:
 
     def test_moduli_by_integration_over_the_circle_and_which_limit_governs(self):
         r = 1.0
-        width = lambda y: 2 * math.sqrt(r**2 - y**2)  # noqa: E731
+        width = lambda y: 2 * math.sqrt(r**2 - y**2)
         Z = 2 * integrate.quad(lambda y: y * width(y), 0, r)[0]
         S = 2 * integrate.quad(lambda y: y**2 * width(y), 0, r)[0] / r
         found = checks(pinned(pin_diameter="2 in", member_edge="4 in"))["pin bending"]

@@ -368,7 +368,7 @@ def branch(F_y, A_g):
 
 
 def loop(F_y, A_g):
-    for P_n in (F_y, A_g):  # noqa: B007
+    for P_n in (F_y, A_g):
         pass
     return P_n
 
@@ -412,7 +412,7 @@ def unknown_argument(bar, A_g):
 
 
 def unknown_name(F_y, A_g):
-    P_n = F_u * A_g  # noqa: F821
+    P_n = F_u * A_g
     return P_n
 
 
@@ -427,7 +427,7 @@ def method_call(F_y, A_g):
 
 
 def no_return(F_y, A_g):
-    P_n = F_y * A_g  # noqa: F841
+    P_n = F_y * A_g
 
 
 def returns_expression(F_y, A_g):
@@ -435,8 +435,8 @@ def returns_expression(F_y, A_g):
 
 
 def returns_unknown(F_y, A_g):
-    P_n = F_y * A_g  # noqa: F841
-    return R_n  # noqa: F821
+    P_n = F_y * A_g
+    return R_n
 
 
 def default(F_y, A_g=1.0):
@@ -450,7 +450,7 @@ def star(*F_y):
 
 
 def two_targets(F_y, A_g):
-    P_n = R_n = F_y * A_g  # noqa: F841
+    P_n = R_n = F_y * A_g
     return P_n
 
 
@@ -486,7 +486,7 @@ def lambda_in(F_y, A_g):
 
 
 def walrus(F_y, A_g):
-    P_n = (R_n := F_y) * A_g  # noqa: F841
+    P_n = (R_n := F_y) * A_g
     return P_n
 
 

@@ -16,7 +16,7 @@ _spec.loader.exec_module(transcribe)
 
 TABLES = Path(gageline.facts.__file__).parent / "tables"
 
-# Stated a second time, on purpose not shared with the transcription: our attribute, their column.
+# Stated a second time, on purpose not shared with the import script: our attribute, their column.
 SAME = [("W", "weight"), ("A", "area"), ("I_x", "Ix"), ("I_y", "Iy"), ("S_x", "Sx"), ("S_y", "Sy"), ("Z_x", "Zx"),
         ("Z_y", "Zy"), ("r_x", "rx"), ("r_y", "ry"), ("r_z", "rz"), ("b_f", "bf"), ("t_f", "tf"), ("t_w", "tw"),
         ("k_des", "k"), ("k_1", "k1"), ("x_bar", "x"), ("y_bar", "y"), ("t_des", "tdes"), ("t_nom", "tnom"),
@@ -25,8 +25,8 @@ FROM_DESIGNATION = {"t", "t_nom", "H", "B", "D"}
 
 
 @pytest.mark.parametrize("stem", transcribe.SERIES)
-def test_file_is_the_transcription(stem):
-    """Our CSV is what the transcription yields from the dataset today, cell by cell."""
+def test_file_is_what_the_import_yields(stem):
+    """Our CSV is what the import yields from the dataset today, cell by cell."""
     header, units, body = transcribe.transcribed(stem)
     with open(TABLES / f"{stem}.csv", newline="", encoding="utf-8") as stream:
         found = list(csv.reader(stream))
@@ -91,7 +91,7 @@ def test_double_angles_agree_with_the_dataset():
         single = shape("L" + "x".join(parts[:3]))
         r_x, r_y = double_angle_radii(single, back != "SLBB", gap)
 
-        assert 2 * single.A == pytest.approx(float(row["area"]), rel=0.005), name
+        assert pytest.approx(float(row["area"]), rel=0.005) == 2 * single.A, name
         assert r_x == pytest.approx(float(row["rx"]), rel=0.007), name
         assert r_y == pytest.approx(float(row["ry"]), rel=0.007), name
     assert len(rows) == 639

@@ -75,7 +75,7 @@ def test_wt_area_centroid_and_inertia():
         y_bar = sum(part * at for part, at in parts) / A
         I_x = (found.b_f * found.t_f**3 + found.t_w * (found.d - found.t_f) ** 3) / 12
         I_x += sum(part * (at - y_bar) ** 2 for part, at in parts)
-        assert found.A == pytest.approx(A, rel=0.0085), name
+        assert pytest.approx(A, rel=0.0085) == found.A, name
         assert found.y_bar == pytest.approx(y_bar, rel=0.0085), name
         assert found.I_x == pytest.approx(I_x, rel=0.015), name
         assert found.S_x == pytest.approx(found.I_x / (found.d - found.y_bar), rel=0.012), name
@@ -102,7 +102,7 @@ def test_tee_is_half_its_parent(series):
         whole = shape(tee.parent)
         assert (whole.b_f, whole.t_f, whole.t_w, whole.k_des) == (tee.b_f, tee.t_f, tee.t_w, tee.k_des), name
         assert tee.parent_d == whole.d == pytest.approx(2 * tee.d, rel=0.005), name
-        assert whole.A == pytest.approx(2 * tee.A, rel=0.0085), name
+        assert pytest.approx(2 * tee.A, rel=0.0085) == whole.A, name
 
 
 @pytest.mark.parametrize("series", ["C", "MC"])
@@ -158,7 +158,7 @@ def test_rectangular_hss():
             continue
         t = found.t_des
         A = 2 * t * (found.B + found.H) - 16 * t**2 + 3 * math.pi * t**2
-        assert found.A == pytest.approx(A, rel=0.0045), name
+        assert pytest.approx(A, rel=0.0045) == found.A, name
         assert found.t_des == pytest.approx(0.93 * found.t_nom, abs=0.0011), name
         assert found.S_x == pytest.approx(found.I_x / (found.H / 2), rel=0.0085), name
         assert found.S_y == pytest.approx(found.I_y / (found.B / 2), rel=0.0085), name
@@ -171,7 +171,7 @@ def test_round_hss_and_pipe():
         inside = found.D - 2 * found.t_des
         wide = 0.035 if name in ODD_PIPES else 0.011
         small = 0.0006 if found.I_x < 0.1 else 0.0
-        assert found.A == pytest.approx(math.pi / 4 * (found.D**2 - inside**2), rel=wide), name
+        assert pytest.approx(math.pi / 4 * (found.D**2 - inside**2), rel=wide) == found.A, name
         assert found.I_x == pytest.approx(math.pi / 64 * (found.D**4 - inside**4), rel=wide, abs=small), name
         assert found.Z_x == pytest.approx((found.D**3 - inside**3) / 6, rel=wide), name
         assert found.t_des == pytest.approx(0.93 * found.t_nom, rel=0.0065, abs=0.0006), name
@@ -191,7 +191,7 @@ def test_weight_is_area_at_490_pounds():
         for name in names(series):
             found = shape(name)
             wide = 0.07 if name in ("M3x2.9", "M4x4.08", "C3x3.5") else 0.021
-            assert found.W == pytest.approx(found.A * 490 / 144, rel=wide), name
+            assert pytest.approx(found.A * 490 / 144, rel=wide) == found.W, name
 
 
 def test_against_finite_elements():

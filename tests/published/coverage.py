@@ -11,9 +11,9 @@ from pathlib import Path
 
 sys.path.insert(0, str(Path(__file__).parents[1]))
 
-from gageline import cells, families, project  # noqa: E402
+from gageline import cells, families, project
 
-from . import test_published  # noqa: E402
+from . import test_published
 
 ROOT = Path(__file__).parents[2]
 BEGIN, END = "<!-- coverage -->", "<!-- end of coverage -->"

@@ -1,5 +1,7 @@
 """Limits of spacing, edge distance and wrench clearance; slenderness as advice.  [AISC360] D1, J3.3 to J3.6."""
 
+from itertools import pairwise
+
 from ..check import Check, Working, not_applicable
 from ..editions import CLAUSES
 from ..errors import NotInTable
@@ -31,7 +33,7 @@ def minimum_spacing(joint, edition):
 def maximum_spacing(joint, edition, weathering):
     """Return the check of the greatest spacing along the member."""
     clause = CLAUSES["maximum spacing and edge distance"][edition]
-    gaps = [joint.pattern[b].x - joint.pattern[a].x for line in lines_of(joint.pattern) for a, b in zip(line, line[1:])]
+    gaps = [joint.pattern[b].x - joint.pattern[a].x for line in lines_of(joint.pattern) for a, b in pairwise(line)]
     if not gaps:
         return not_applicable("spacing max", "Spacing along the member, maximum", "joint", clause, "one bolt per line", kind="detailing")
     do = Working()

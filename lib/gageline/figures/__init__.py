@@ -12,8 +12,8 @@ drafting    a drawing to scale with dimensions
 
 from .curve import capacity_curve, permissible_loads
 from .elevation import elevation
-from .paths import paths
 from .layouts import contour, pareto
+from .paths import paths
 from .section import cross_section
 from .style import Figure
 

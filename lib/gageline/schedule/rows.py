@@ -174,7 +174,7 @@ def _value(text, field, unit):
         return int(float(text))
     listed = unit_of(field) is not None and tuple in kinds
     if unit:
-        with_unit = lambda part: f"{part.rstrip()} {unit}" if _PLAIN.fullmatch(part.strip()) else part  # noqa: E731
+        with_unit = lambda part: f"{part.rstrip()} {unit}" if _PLAIN.fullmatch(part.strip()) else part
         return re.sub(r"[^,;]+", lambda match: with_unit(match[0]), text) if listed else with_unit(text)
     if tuple in kinds and unit_of(field) is None:
         return [part.strip() for part in re.split(r"[|\n]", text) if part.strip()]

@@ -125,7 +125,7 @@ def run_cells(shell, book, on_cell):
     book, kept = copy.deepcopy(book), shell.collected
     streams = {name: _Stream(name, kept) for name in ("stdout", "stderr")}
     sys.stdout, sys.stderr = streams.values()
-    files = {name: tempfile.TemporaryFile() for name in streams}  # noqa: SIM115 - open until the process ends
+    files = {name: tempfile.TemporaryFile() for name in streams}
     for name, file in files.items():
         os.dup2(file.fileno(), streams[name].fileno())
     for number, cell in enumerate(book["cells"], start=1):
