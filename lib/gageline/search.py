@@ -13,6 +13,7 @@ from . import families, study, units
 from .editions import Basis
 from .errors import GagelineError, InputError, ScopeError, nearest
 from .facts import bolts as facts
+from .geometry.pattern import clear_between, least, most
 
 LENGTHS = ("pitch", "gage", "gage_from_back", "member_end", "plate_end", "plate_thickness", "plate_width")
 """Inputs that vary as arrays; every other input that varies is looped over."""
@@ -69,11 +70,11 @@ class Found:
         """Return the indices of the layouts that no other beats in both x and y, by growing x."""
         xs, ys = self.layouts[x], self.layouts[y]
         order = np.lexsort((ys, xs))
-        kept, least = [], np.inf
+        kept, lowest = [], np.inf
         for i in order:
-            if ys[i] < least - 1e-12:
+            if ys[i] < lowest - 1e-12:
                 kept.append(int(i))
-                least = ys[i]
+                lowest = ys[i]
         return kept
 
 
@@ -172,7 +173,7 @@ def _detailed(connection, joint, size):
     for i, j in _neighbours(given):
         ok &= np.hypot(pattern[i].x - pattern[j].x, pattern[i].y - pattern[j].y) >= 8 / 3 * d - 1e-9
         for ply in (pattern, plate):
-            ok &= _clear(ply[i], ply[j]) >= d - 1e-9
+            ok &= clear_between(ply[i], ply[j]) >= d - 1e-9
     t = np.minimum(joint.member.t, joint.plate.t)
     cap, times = (joint.member.constants.spacing_weathering, 14) if given.bare_weathering else (joint.member.constants.spacing, 24)
     if given.rows > 1:
@@ -182,15 +183,15 @@ def _detailed(connection, joint, size):
     held = {attachment.y for attachment in connection.element.attachments}
     for ply, free in ((joint.member, (0.0 not in held, connection.element.width not in held)), (joint.plate, (True, True))):
         kind, _, direction = ply.kind.partition(" ")
-        least = {toward: facts.minimum_edge(connection.size) + facts.edge_increment(connection.size, kind, toward) for toward in (True, False)}
+        required = {toward: facts.minimum_edge(connection.size) + facts.edge_increment(connection.size, kind, toward) for toward in (True, False)}
         ends = [ply.end.distance(hole.x, hole.y) for hole in ply.bolted]
         sides = [side for hole in ply.bolted for side, is_free in zip((hole.y, ply.width - hole.y), free) if is_free]
         for end in ends:
-            ok &= end >= least[direction == "along"] - 1e-9
+            ok &= end >= required[direction == "along"] - 1e-9
         for side in sides:
-            ok &= side >= least[direction == "across"] - 1e-9
-        nearest_end = _least(ends)
-        farthest = nearest_end if ply.name == "plate" else _most([nearest_end, *(_least(column) for column in _sides(ply, free))])
+            ok &= side >= required[direction == "across"] - 1e-9
+        nearest_end = least(ends)
+        farthest = nearest_end if ply.name == "plate" else most([nearest_end, *(least(column) for column in _sides(ply, free))])
         ok &= farthest <= np.minimum(12 * ply.t, ply.constants.edge) + 1e-9
     # Holes must lie on the part, held sides included.
     for ply in (joint.member, joint.plate):
@@ -221,12 +222,6 @@ def _sides(ply, free):
     return [column for column, is_free in zip((lower, [ply.width - y for y in lower]), free) if is_free]
 
 
-def _clear(a, b):
-    gap_x = np.maximum(np.abs(a.x - b.x) - max(a.along - a.across, 0) / 2 - max(b.along - b.across, 0) / 2, 0)
-    gap_y = np.maximum(np.abs(a.y - b.y) - max(a.across - a.along, 0) / 2 - max(b.across - b.along, 0) / 2, 0)
-    return np.hypot(gap_x, gap_y) - (min(a.across, a.along) + min(b.across, b.along)) / 2
-
-
 def _fits_beside_flanges(connection, joint):
     part = connection.element
     if part.name not in ("web", "stem") or (part.series in ("C", "MC") and connection.inputs.plates == 1):
@@ -234,14 +229,6 @@ def _fits_beside_flanges(connection, joint):
     lo = joint.pattern[0].y - joint.plate_pattern[0].y
     fits = lo >= -1e-9
     return fits & (lo + joint.plate.width <= part.width + 1e-9) if part.name == "web" else fits
-
-
-def _least(values):
-    return np.minimum.reduce(np.broadcast_arrays(*values)) if len(values) > 1 else values[0]
-
-
-def _most(values):
-    return np.maximum.reduce(np.broadcast_arrays(*values)) if len(values) > 1 else values[0]
 
 
 def _ranked(collected, weights, evaluated, refused, base, basis, keep):

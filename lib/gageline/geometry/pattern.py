@@ -156,14 +156,15 @@ def connection_length(holes):
 
 
 def clear_between(a, b):
-    """Return the shortest clear distance between the edges of two holes, negative where they overlap. [in]
+    """Return the shortest clear distance between the edges of two holes, negative where they overlap; centres may be (N,). [in]
 
     A slot is a straight part with round ends, so a hole is all points within a radius of its core: a point for a
     round hole, an axis-parallel line for a slot.
     """
-    gap_x = max(abs(a.x - b.x) - _half_core(a.along, a.across) - _half_core(b.along, b.across), 0.0)
-    gap_y = max(abs(a.y - b.y) - _half_core(a.across, a.along) - _half_core(b.across, b.along), 0.0)
-    return hypot(gap_x, gap_y) - (min(a.across, a.along) + min(b.across, b.along)) / 2.0
+    gap_x = most([abs(a.x - b.x) - _half_core(a.along, a.across) - _half_core(b.along, b.across), 0.0])
+    gap_y = most([abs(a.y - b.y) - _half_core(a.across, a.along) - _half_core(b.across, b.along), 0.0])
+    apart = np.hypot if any(isinstance(gap, np.ndarray) for gap in (gap_x, gap_y)) else hypot
+    return apart(gap_x, gap_y) - (min(a.across, a.along) + min(b.across, b.along)) / 2.0
 
 
 def closest_pair(holes):
